@@ -1,0 +1,1 @@
+export { type Palette, palette } from './palette.ts';
