@@ -1,20 +1,11 @@
-export const log = Math.log;
-export const exp = Math.exp;
-export const log1p = Math.log1p;
-export const expm1 = Math.expm1;
-export const pow = Math.pow;
-export const sin = Math.sin;
-export const cos = Math.cos;
-export const tan = Math.tan;
-export const asin = Math.asin;
-export const acos = Math.acos;
-export const atan = Math.atan;
-export const atan2 = Math.atan2;
-export const sinh = Math.sinh;
-export const cosh = Math.cosh;
-export const tanh = Math.tanh;
-export const atanh = Math.atanh;
-export function sinCos(out: Float64Array, x: number): void {
-  out[0] = Math.sin(x);
-  out[1] = Math.cos(x);
-}
+/**
+ * Elementary functions that give the same bits in every JavaScript engine, built on + - * / and sqrt with literal
+ * tables, and the numerical tools that stand on them. Special values are those of the functions of the same name
+ * of the language. Measured against exact arithmetic in test/engine/math.
+ */
+export { acos, asin, atan, atan2 } from './arc.ts';
+export { exp, expm1 } from './exp.ts';
+export { cosh, sinh, tanh } from './hyperbolic.ts';
+export { atanh, log, log1p } from './log.ts';
+export { pow } from './power.ts';
+export { cos, sin, sinCos, tan } from './sine.ts';
