@@ -1,0 +1,1 @@
+export { branchDipole, mapDipole, twiceDot } from './dipole-map.ts';

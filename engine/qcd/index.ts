@@ -1,0 +1,10 @@
+export { kernelGluon, kernelGluonToQuarks, kernelQuark } from './kernels.ts';
+export {
+  b0,
+  b1,
+  type CouplingChoice,
+  type CouplingOptions,
+  LandauPoleError,
+  RunningCoupling,
+  softGluonK,
+} from './running-coupling.ts';

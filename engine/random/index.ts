@@ -1,0 +1,1 @@
+export { Philox, uniform } from './philox.ts';
