@@ -1,0 +1,113 @@
+import {
+  ENTRY_COLUMNS,
+  type History,
+  KINDS,
+  REASONS,
+  ROLES,
+  type SampleHead,
+  STEP_COLUMNS,
+  TRIAL_COLUMNS,
+} from '../../engine/index.ts';
+import { numberText, type TextColumn, typeset } from './columns.ts';
+import { partonName } from './parton-name.ts';
+
+type Spec = { readonly name: string; readonly kind: string; readonly unit: string };
+type Table = { readonly length: number };
+
+/** Decimals of momenta: 1e-5 GeV, whatever the energy, so that sums can be made by eye. */
+const DECIMALS = 5;
+const MOMENTA = ['px', 'py', 'pz', 'e', 'm'];
+/** The numbers of a step stand in a table of their own, below the one of what happened: both fit a screen. */
+const HAPPENED = [
+  ...['kind', 'channel', 'emitter', 'partner', 'recoiler', 'i', 'j', 'recoilerAfter', 'previous'],
+  ...['generation', 'rejected'],
+];
+
+interface Words {
+  readonly [column: string]: readonly string[];
+}
+
+/** The columns of a table that its author recorded, as text. */
+function tableText(
+  label: string,
+  table: Table,
+  specs: readonly Spec[],
+  present: readonly string[],
+  words: Words,
+  tUnit: string,
+): string {
+  const rows = Array.from({ length: table.length }, (_, row) => String(row));
+  const columns: TextColumn[] = [{ name: label, unit: '', cells: rows, align: 'number' }];
+  for (const { name, kind, unit } of specs) {
+    if (!present.includes(name)) continue;
+    const values = Array.from((table as unknown as Record<string, ArrayLike<number>>)[name]);
+    const shown = unit === 'unit of t' ? tUnit : unit;
+    if (words[name]) {
+      columns.push({ name, unit: '', cells: values.map((code) => words[name][code] ?? '?'), align: 'word' });
+    } else if (kind === 'float') {
+      const text = MOMENTA.includes(name) ? momentumText : numberText;
+      columns.push({ name, unit: shown, cells: values.map(text), align: 'number' });
+    } else {
+      columns.push({ name, unit: shown, cells: values.map(String), align: 'number' });
+    }
+    if (name === 'id') columns.push({ name: '', unit: '', cells: values.map(partonName), align: 'word' });
+  }
+  return typeset(columns);
+}
+
+function momentumText(value: number): string {
+  if (Number.isNaN(value)) return '-';
+  // a rounded minus nothing reads like a finding
+  const text = value.toFixed(DECIMALS);
+  return Number(text) === 0 ? text.replace('-', '') : text;
+}
+
+/** The head of a file as aligned lines. */
+export function headText(head: SampleHead): string {
+  const unit = head.meaning.tUnit ?? '';
+  const shower = Object.entries(head.shower).map(([name, value]) => `${name} ${value ?? '-'}`);
+  const rows: [string, string][] = [
+    ['producer', `${head.producer.name} ${head.producer.version}`],
+    ['beams', head.beams.map(({ id, e }) => `${partonName(id)} (${numberText(e)} GeV)`).join(' ')],
+    ['sqrtS', `${numberText(head.sqrtS)} GeV`],
+    ['evolution', `${head.evolutionVariable}, ordering ${head.ordering}`],
+    ['hardScale', `${numberText(head.hardScale)} ${unit}`],
+    ['cutoff', `${numberText(head.cutoff)} GeV^2`],
+    ['tLow', `${numberText(head.tLow)} ${unit}`],
+    ['shower', shower.join(', ')],
+    ['seed', String(head.seed ?? '-')],
+  ];
+  return rows.map(([name, text]) => `  ${name.padEnd(12)}${text}`).join('\n');
+}
+
+function titleOf({ head, entries, steps }: History): string {
+  const process = `${head.process.incoming.map(partonName).join(' ')} -> ${head.process.outgoing.map(partonName).join(' ')}`;
+  const status =
+    head.status === 'complete' ? '' : `, ${head.status}: ${head.statusReason ?? 'no reason given'}`;
+  const label = head.label === null ? '' : ` "${head.label}"`;
+  const weight = head.weight === 1 ? '' : `, weight ${numberText(head.weight)}`;
+  const size = `${steps.length} steps, ${entries.length} entries`;
+  return `event ${head.event}${label}: ${process}, ${size}${weight}${status}`;
+}
+
+/** One event for people: title, entries, steps (what happened, then its numbers) and trials, names and units as in JSON. */
+export function eventText(history: History): string {
+  const { head, entries, steps, trials, channels } = history;
+  const unit = head.meaning.tUnit ?? '';
+  const stepSpecs = (happened: boolean): Spec[] =>
+    STEP_COLUMNS.filter(({ name }) => HAPPENED.includes(name) === happened);
+  const words = { role: ROLES, kind: KINDS, channel: channels, reason: REASONS };
+  const parts = [
+    titleOf(history),
+    tableText('entry', entries, ENTRY_COLUMNS, head.columns.entries, words, unit),
+  ];
+  if (steps.length > 0) {
+    parts.push(tableText('step', steps, stepSpecs(true), head.columns.steps, words, unit));
+    parts.push(tableText('step', steps, stepSpecs(false), head.columns.steps, words, unit));
+  }
+  if (trials && trials.length > 0) {
+    parts.push(tableText('trial', trials, TRIAL_COLUMNS, head.columns.trials ?? [], words, unit));
+  }
+  if (head.rerun) parts.push(`  again with: ${head.rerun}`);
+  return `${parts.join('\n\n')}\n`;
+}

@@ -1,0 +1,92 @@
+import { VERSION } from '../../engine/index.ts';
+import { readArguments } from './arguments.ts';
+import type { Command, Place } from './command.ts';
+import { DONE, explain, WrongUse } from './errors.ts';
+import { commandHelp, overview } from './help.ts';
+import { watchInterruptions } from './interruption.ts';
+import { nearest } from './nearest.ts';
+import { endWithReader, print } from './streams.ts';
+
+interface Entry {
+  readonly name: string;
+  readonly purpose: string;
+  load(): Promise<Command>;
+}
+
+// Purposes are said here as well, so that the overview loads no command. A test holds them against the commands.
+const COMMANDS: readonly Entry[] = [
+  {
+    name: 'grow',
+    purpose: 'simulate events and record their histories',
+    load: async () => (await import('./grow.ts')).grow,
+  },
+  {
+    name: 'show',
+    purpose: "print a file's head and the entries and steps of its events",
+    load: async () => (await import('./show.ts')).show,
+  },
+  {
+    name: 'summary',
+    purpose: 'sample means with statistical errors; reads and verifies every chunk',
+    load: async () => (await import('./summary.ts')).summary,
+  },
+  {
+    name: 'view',
+    purpose: 'serve the viewer on the loopback address and print its address',
+    load: async () => (await import('./view.ts')).view,
+  },
+  {
+    name: 'convert',
+    purpose: 'write what is whole of a damaged file as a new one',
+    load: async () => (await import('./convert.ts')).convert,
+  },
+];
+
+/**
+ * The whole command line.
+ *
+ * @param words what stands behind `branchlight`.
+ * @returns the exit status.
+ */
+export async function run(words: readonly string[], place: Place): Promise<number> {
+  endWithReader();
+  watchInterruptions();
+  const [first, ...rest] = words;
+  const said = COMMANDS.some(({ name }) => name === first) ? ` ${first}` : '';
+  try {
+    return await dispatch(first, rest, place);
+  } catch (error) {
+    const { message, status } = explain(error);
+    process.stderr.write(`branchlight${said}: ${message}\n`);
+    return status;
+  }
+}
+
+async function dispatch(first: string | undefined, rest: readonly string[], place: Place): Promise<number> {
+  if (first === '--help' || first === '-h') {
+    await print(overview(COMMANDS));
+    return DONE;
+  }
+  if (first === '--version') {
+    await print(`branchlight ${VERSION}\n`);
+    return DONE;
+  }
+  const entry = COMMANDS.find(({ name }) => name === first);
+  if (!entry) throw noCommand(first);
+  const command = await entry.load();
+  const said = readArguments(command, rest);
+  if (said.help) {
+    await print(commandHelp(command));
+    return DONE;
+  }
+  return command.run(said.values, said.operands, place);
+}
+
+function noCommand(first: string | undefined): WrongUse {
+  const names = COMMANDS.map(({ name }) => name);
+  const takes = `the commands are ${names.join(', ')}`;
+  if (first === undefined) return new WrongUse('unknown-command', `a command is needed; ${takes}`);
+  const near = nearest(first, names);
+  const meant = near ? `; did you mean ${near}?` : '';
+  return new WrongUse('unknown-command', `there is no command ${first}${meant} (${takes})`);
+}
