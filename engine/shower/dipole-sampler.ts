@@ -3,8 +3,9 @@ import { exp, log } from '../math/index.ts';
 import type { RunningCoupling } from '../qcd/index.ts';
 import { type Philox, uniform } from '../random/index.ts';
 import type { DipoleState } from './dipole-state.ts';
+import { EvolutionWindows } from './evolution-windows.ts';
 
-const LN_2 = 0.6931471805599453;
+const GLUON = 21;
 
 /** Codes into CHANNELS. */
 export const Q_QG = 0;
@@ -12,10 +13,10 @@ export const G_GG = 1;
 export const G_QQ = 2;
 
 /** Codes into REASONS, here those that a massless dipole shower knows. */
-export const PHASE_SPACE = 0;
-export const COUPLING = 1;
-export const KERNEL = 2;
-export const CUTOFF = 3;
+const PHASE_SPACE = 0;
+const COUPLING = 1;
+const KERNEL = 2;
+const CUTOFF = 3;
 
 /** Told of every rejected trial when trials are recorded. */
 export interface TrialListener {
@@ -25,17 +26,15 @@ export interface TrialListener {
 /**
  * The veto algorithm for massless dipoles: one competing process over all dipole ends.
  *
- * The overestimate is constant in ln t inside windows of ln 2 that lie at fixed places below the hard scale; within a
- * window it has the shape of the soft singularity, cut off where the resolution does. So a dipole costs one logarithm
- * per window, and its weight is a function of its q2 and the window alone, whatever happened before. With w = 1-z,
- * K <= C 2w/(w^2 + kappa), kappa = t/Q^2, in kt ordering and K <= C 2/(w + y) in virtuality ordering, C = CF for a
- * quark end and CA/2 for a gluon end.
+ * The overestimate is constant in ln t inside windows of ln 2 at fixed places below the hard scale, and has the shape
+ * of the soft singularity, cut off where the resolution is. With w = 1-z: K <= C 2w/(w^2 + kappa), kappa = t/Q^2, in kt
+ * ordering, and K <= C 2/(w + y), y = t/Q^2, in virtuality ordering; C = CF for a quark end, CA/2 for a gluon end;
+ * g -> q qbar is flat in z. A dipole's weight is a function of its Q^2 and the window alone, whatever happened before.
  *
- * `next` leaves what it found in the public fields. Source: physics of Catani & Seymour, Nucl. Phys. B485 (1997) 291,
- * with the veto algorithm as in Ellis, Stirling, Webber, chapter 5.
+ * `next` leaves what it found in the public fields.
  */
 export class DipoleSampler {
-  /** ln t [GeV^2] of the state of the evolution: of the last trial. */
+  /** ln t [GeV^2] at which the evolution stands. */
   lnT = 0;
   t = 0;
   z = 0;
@@ -57,22 +56,17 @@ export class DipoleSampler {
   private readonly virtuality: boolean;
   private readonly coupling: RunningCoupling;
   private readonly flavours: number;
+  /** kT^2 resolution [GeV^2], and alpha_s there. */
   private readonly cutoff: number;
-  private readonly lnHardScale: number;
-  private readonly lnLowest: number;
-  /** Window: number, its lower end, alpha_s maximum over it. */
-  private window = -1;
-  private lnWindowLow = 0;
-  private tWindowLow = 0;
-  private lowestW = 0;
-  private largestAlphaS = 0;
-  /** Dipole to the integral of the soft shape and to the weight of both its ends. */
+  private readonly alphaSCutoff: number;
+  private readonly windows: EvolutionWindows;
+  private window = 0;
+  /** Dipole to ln Q^2, to the integral of the soft shape over w, and to the weight of both ends. */
+  private lnQ2 = new Float64Array(64);
   private shape = new Float64Array(64);
   private weight = new Float64Array(64);
 
-  /**
-   * @param cutoff kT^2 resolution [GeV^2]. @param hardScale, @param lowest ends of the evolution [GeV^2].
-   */
+  /** @param cutoff kT^2 resolution [GeV^2]. @param hardScale, @param lowest ends of the evolution [GeV^2]. */
   constructor(
     order: 'kt' | 'virtuality',
     coupling: RunningCoupling,
@@ -85,100 +79,202 @@ export class DipoleSampler {
     this.coupling = coupling;
     this.flavours = flavours;
     this.cutoff = cutoff;
-    this.lnHardScale = log(hardScale);
-    this.lnLowest = log(lowest);
+    this.alphaSCutoff = coupling.atLog(log(cutoff));
+    this.windows = new EvolutionWindows(hardScale, lowest, coupling);
   }
 
   /** Begin at ln t, with the dipoles of the state. */
   start(state: DipoleState, lnT: number): void {
     this.lnT = lnT;
-    this.openWindow(state, Math.max(0, Math.floor((this.lnHardScale - lnT) / LN_2)));
+    this.window = this.windows.at(lnT);
+    for (let dipole = 0; dipole < state.dipoles; dipole++) this.enter(state, dipole);
+    this.weighAll(state);
   }
 
   /** Weigh again the dipoles that the last branching changed. */
   refresh(state: DipoleState): void {
-    for (let n = 0; n < state.touchedCount; n++) this.weigh(state, state.touched[n]);
+    for (let n = 0; n < state.touchedCount; n++) {
+      const dipole = state.touched[n];
+      this.enter(state, dipole);
+      this.weigh(state, dipole);
+    }
   }
 
   /**
    * Find the next branching below `lnT`.
    *
+   * One long function: split into its parts it took twice as long, because every double that crosses a call which
+   * the compiler does not inline becomes an object.
+   *
    * @param random at the start of this step's numbers.
    * @returns false where nothing branches any more down to the lowest t.
    */
   next(state: DipoleState, random: Philox, listener: TrialListener | null): boolean {
-    this.rejected = 0;
+    const { virtuality, windows, coupling, weight, flavours } = this;
+    const lastWindow = windows.count - 1;
+    const softCharge = virtuality ? 1 : 0.5;
+    let window = this.window;
+    let lnT = this.lnT;
+    let lnLow = windows.lnLow[window];
+    let low = windows.low[window];
+    let largestAlphaS = virtuality ? this.alphaSCutoff : windows.alphaS[window];
     let total = this.totalWeight(state);
+    let rejected = 0;
     for (;;) {
       random.block();
       // distance in units of the expected number of trials, used up window by window
       let distance = -log(uniform(random.x0));
       for (;;) {
-        const rate = (this.largestAlphaS / (2 * PI)) * total;
-        const lnT = this.lnT - distance / rate;
-        if (lnT > this.lnWindowLow) {
-          this.lnT = lnT;
+        const rate = (largestAlphaS / (2 * PI)) * total;
+        const next = lnT - distance / rate;
+        if (next > lnLow) {
+          lnT = next;
           break;
         }
-        distance -= (this.lnT - this.lnWindowLow) * rate;
-        this.lnT = this.lnWindowLow;
-        if (this.lnWindowLow === this.lnLowest) return false;
-        this.openWindow(state, this.window + 1);
+        distance -= (lnT - lnLow) * rate;
+        lnT = lnLow;
+        if (window === lastWindow) {
+          this.lnT = lnT;
+          this.rejected = rejected;
+          return false;
+        }
+        this.window = ++window;
+        this.weighAll(state);
+        lnLow = windows.lnLow[window];
+        low = windows.low[window];
+        if (!virtuality) largestAlphaS = windows.alphaS[window];
         total = this.totalWeight(state);
       }
-      this.t = exp(this.lnT);
-      const reason = this.virtuality
-        ? this.tryVirtuality(state, random, total)
-        : this.tryKt(state, random, total);
-      if (reason < 0) return true;
-      this.rejected++;
-      if (listener !== null) listener.reject(this, reason, reason === PHASE_SPACE ? NaN : this.ratio);
+      const t = exp(lnT);
+
+      // which dipole, end, channel and flavour: one uniform number spread over the weights
+      let share = uniform(random.x1) * total;
+      const last = state.dipoles - 1;
+      let dipole = 0;
+      while (dipole < last && share >= weight[dipole]) share -= weight[dipole++];
+      // rounding may lead past the end, onto a dipole that cannot branch
+      while (weight[dipole] === 0 && dipole > 0) dipole--;
+      const shape = this.shape[dipole];
+      const glueWeight = CA * softCharge * shape;
+      const colourGluon = state.id[state.colourEnd[dipole]] === GLUON;
+      const colourWeight = colourGluon ? glueWeight + flavours * (TR / 2) : 2 * CF * softCharge * shape;
+      const fromColourEnd = share < colourWeight;
+      if (!fromColourEnd) share -= colourWeight;
+      const gluon = fromColourEnd ? colourGluon : state.id[state.anticolourEnd[dipole]] === GLUON;
+      const channel = gluon ? (share < glueWeight || flavours === 0 ? G_GG : G_QQ) : Q_QG;
+
+      // w, y and the kernel over its overestimate
+      const q2 = state.q2[dipole];
+      const fraction = uniform(random.x2);
+      const relativeLow = low / q2;
+      let w = fraction;
+      let y = t / q2;
+      let kT2 = t;
+      let soft = 1;
+      if (virtuality) {
+        if (channel !== G_QQ) {
+          w = (this.lowestW(low) + relativeLow) * exp(fraction * shape) - relativeLow;
+          soft = 1 / (w + relativeLow);
+        }
+        kT2 = (1 - w) * w * t;
+      } else {
+        if (channel !== G_QQ) {
+          const w2 = relativeLow * (exp(fraction * shape) - 1);
+          w = Math.sqrt(w2);
+          soft = w / (w2 + relativeLow);
+        }
+        y /= (1 - w) * w;
+      }
+      const z = 1 - w;
+      let reason = -1;
+      let ratio = NaN;
+      if (!(z > 0 && w > 0 && y < 1)) reason = PHASE_SPACE;
+      else if (kT2 < this.cutoff) reason = CUTOFF;
+      else {
+        // 1 - z(1-y) = w + z y without cancellation
+        const pole = 1 / (w + z * y);
+        let kernel = 1 - y;
+        if (channel === Q_QG) kernel *= (2 * pole - (1 + z)) / (2 * soft);
+        else if (channel === G_GG) kernel *= (pole - 1 + 0.5 * z * w) / soft;
+        else kernel *= 1 - 2 * z * w;
+        const alphaS = coupling.atLog(virtuality ? log(kT2) : lnT);
+        const slower = alphaS / largestAlphaS;
+        ratio = slower * kernel;
+        const u = uniform(random.x3);
+        if (u < ratio) this.alphaS = alphaS;
+        else reason = u >= slower ? COUPLING : KERNEL;
+      }
+
+      if (reason < 0 || listener !== null) {
+        this.lnT = lnT;
+        this.t = t;
+        this.z = z;
+        this.w = w;
+        this.y = y;
+        this.kT2 = kT2;
+        this.ratio = ratio;
+        this.dipole = dipole;
+        this.fromColourEnd = fromColourEnd;
+        this.channel = channel;
+      }
+      if (reason < 0) {
+        this.rejected = rejected;
+        if (channel === G_QQ) {
+          const flavour = 1 + Math.floor((share - glueWeight) / (TR / 2));
+          this.flavour = flavour < flavours ? flavour : flavours;
+        }
+        return true;
+      }
+      rejected++;
+      if (listener !== null) listener.reject(this, reason, ratio);
     }
   }
 
-  private openWindow(state: DipoleState, window: number): void {
-    this.window = window;
-    const low = this.lnHardScale - (window + 1) * LN_2;
-    this.lnWindowLow = low > this.lnLowest ? low : this.lnLowest;
-    this.tWindowLow = exp(this.lnWindowLow);
-    if (this.virtuality) {
-      // z(1-z) >= tc/t keeps 1-z above tc/t, which is least at the upper end of the window
-      this.lowestW = this.cutoff / (2 * this.tWindowLow);
-      this.largestAlphaS = this.coupling.atLog(log(this.cutoff));
-    } else {
-      this.largestAlphaS = this.coupling.atLog(this.lnWindowLow);
-    }
+  /** z(1-z) >= tc/t keeps 1-z above tc/t, which is least at the upper end of the window, at most twice its lower end. */
+  private lowestW(low: number): number {
+    return this.cutoff / (2 * low);
+  }
+
+  private enter(state: DipoleState, dipole: number): void {
+    if (dipole >= this.weight.length) this.growWeights(dipole);
+    this.lnQ2[dipole] = log(state.q2[dipole]);
+  }
+
+  private weighAll(state: DipoleState): void {
     for (let dipole = 0; dipole < state.dipoles; dipole++) this.weigh(state, dipole);
   }
 
   private weigh(state: DipoleState, dipole: number): void {
-    if (dipole >= this.weight.length) this.growWeights(dipole);
     const q2 = state.q2[dipole];
-    const low = this.tWindowLow;
-    if (this.virtuality ? low >= q2 : 4 * low >= q2) {
+    const low = this.windows.low[this.window];
+    const { virtuality, flavours } = this;
+    if (virtuality ? low >= q2 : 4 * low >= q2) {
       this.weight[dipole] = 0;
       return;
     }
-    const shape = this.virtuality ? log((q2 + low) / (this.lowestW * q2 + low)) : log((q2 + low) / low);
+    // kt: the integral over 0 < w < 1 is ln(Q^2/low + 1); taking ln(Q^2/low) + low/Q^2 instead, w a little above 1 is
+    // thrown too and refused, and no window costs a logarithm
+    const shape = virtuality
+      ? log((q2 + low) / (this.lowestW(low) * q2 + low))
+      : this.lnQ2[dipole] - this.windows.lnLow[this.window] + low / q2;
     this.shape[dipole] = shape;
+    const softCharge = virtuality ? 1 : 0.5;
+    const glue = CA * softCharge * shape + flavours * (TR / 2);
+    const quark = 2 * CF * softCharge * shape;
     this.weight[dipole] =
-      this.endWeight(state.id[state.colourEnd[dipole]], shape) +
-      this.endWeight(state.id[state.anticolourEnd[dipole]], shape);
-  }
-
-  private endWeight(id: number, shape: number): number {
-    if (id !== 21) return 2 * CF * (this.virtuality ? shape : 0.5 * shape);
-    return CA * (this.virtuality ? shape : 0.5 * shape) + this.flavours * (TR / 2);
+      (state.id[state.colourEnd[dipole]] === GLUON ? glue : quark) +
+      (state.id[state.anticolourEnd[dipole]] === GLUON ? glue : quark);
   }
 
   private growWeights(dipole: number): void {
-    const length = 2 * dipole;
-    const shape = new Float64Array(length);
-    const weight = new Float64Array(length);
-    shape.set(this.shape);
-    weight.set(this.weight);
-    this.shape = shape;
-    this.weight = weight;
+    const widen = (column: Float64Array) => {
+      const wider = new Float64Array(2 * dipole);
+      wider.set(column);
+      return wider;
+    };
+    this.lnQ2 = widen(this.lnQ2);
+    this.shape = widen(this.shape);
+    this.weight = widen(this.weight);
   }
 
   private totalWeight(state: DipoleState): number {
@@ -187,101 +283,5 @@ export class DipoleSampler {
     let sum = 0;
     for (let dipole = 0; dipole < count; dipole++) sum += weight[dipole];
     return sum;
-  }
-
-  /** Which dipole, end, channel and flavour: one uniform number spread over the weights. */
-  private choose(state: DipoleState, random: Philox, total: number): void {
-    const { weight } = this;
-    let share = uniform(random.x1) * total;
-    const last = state.dipoles - 1;
-    let dipole = 0;
-    while (dipole < last && share >= weight[dipole]) share -= weight[dipole++];
-    // rounding may lead past the end, onto a dipole that cannot branch
-    while (weight[dipole] === 0 && dipole > 0) dipole--;
-    this.dipole = dipole;
-    const shape = this.shape[dipole];
-    const colourId = state.id[state.colourEnd[dipole]];
-    const colourWeight = this.endWeight(colourId, shape);
-    this.fromColourEnd = share < colourWeight;
-    if (!this.fromColourEnd) share -= colourWeight;
-    const id = this.fromColourEnd ? colourId : state.id[state.anticolourEnd[dipole]];
-    if (id !== 21) {
-      this.channel = Q_QG;
-      return;
-    }
-    share -= CA * (this.virtuality ? shape : 0.5 * shape);
-    if (share < 0 || this.flavours === 0) {
-      this.channel = G_GG;
-      return;
-    }
-    this.channel = G_QQ;
-    const flavour = 1 + Math.floor(share / (TR / 2));
-    this.flavour = flavour < this.flavours ? flavour : this.flavours;
-  }
-
-  /** One trial in kt ordering. @returns the reason of its rejection, -1 where it is accepted. */
-  private tryKt(state: DipoleState, random: Philox, total: number): number {
-    this.choose(state, random, total);
-    const q2 = state.q2[this.dipole];
-    const share = uniform(random.x2);
-    const kappaLow = this.tWindowLow / q2;
-    let w: number;
-    if (this.channel === G_QQ) w = share;
-    else w = Math.sqrt(kappaLow * (exp(share * this.shape[this.dipole]) - 1));
-    const z = 1 - w;
-    const zw = z * w;
-    const y = this.t / (zw * q2);
-    this.z = z;
-    this.w = w;
-    this.y = y;
-    this.kT2 = this.t;
-    if (!(z > 0 && y < 1)) return PHASE_SPACE;
-    const kernel = this.kernelRatio(w / (w * w + kappaLow));
-    return this.decide(random, this.lnT, kernel);
-  }
-
-  /** One trial in virtuality ordering. See tryKt. */
-  private tryVirtuality(state: DipoleState, random: Philox, total: number): number {
-    this.choose(state, random, total);
-    const q2 = state.q2[this.dipole];
-    const share = uniform(random.x2);
-    const yLow = this.tWindowLow / q2;
-    let w: number;
-    if (this.channel === G_QQ) w = share;
-    else w = (this.lowestW + yLow) * exp(share * this.shape[this.dipole]) - yLow;
-    const z = 1 - w;
-    const y = this.t / q2;
-    this.z = z;
-    this.w = w;
-    this.y = y;
-    if (!(z > 0 && w > 0 && y < 1)) return PHASE_SPACE;
-    const kT2 = z * w * this.t;
-    this.kT2 = kT2;
-    if (kT2 < this.cutoff) {
-      this.ratio = NaN;
-      return CUTOFF;
-    }
-    const kernel = this.kernelRatio(1 / (w + yLow));
-    return this.decide(random, log(kT2), kernel);
-  }
-
-  /** (1-y) K over its overestimate, whose soft shape is C * 2 * `soft`. */
-  private kernelRatio(soft: number): number {
-    const { z, w, y } = this;
-    // 1 - z(1-y) = w + z y without cancellation
-    const pole = 1 / (w + z * y);
-    if (this.channel === Q_QG) return ((1 - y) * (2 * pole - (1 + z))) / (2 * soft);
-    if (this.channel === G_GG) return ((1 - y) * (pole - 1 + 0.5 * z * w)) / soft;
-    return (1 - y) * (1 - 2 * z * w);
-  }
-
-  private decide(random: Philox, lnKT2: number, kernel: number): number {
-    const alphaS = this.coupling.atLog(lnKT2);
-    this.alphaS = alphaS;
-    const coupling = alphaS / this.largestAlphaS;
-    this.ratio = coupling * kernel;
-    const u = uniform(random.x3);
-    if (u < this.ratio) return -1;
-    return u >= coupling ? COUPLING : KERNEL;
   }
 }
