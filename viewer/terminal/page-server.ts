@@ -184,10 +184,12 @@ function listen(server: Server, port: number): Promise<void> {
 function close(server: Server): Promise<void> {
   return new Promise((resolve) => {
     const deadline = setTimeout(() => server.closeAllConnections(), PATIENCE_MS);
+    // Again and again: a connection whose request was under way is kept for a next one when that is answered.
+    const idle = setInterval(() => server.closeIdleConnections(), 20);
     server.close(() => {
       clearTimeout(deadline);
+      clearInterval(idle);
       resolve();
     });
-    server.closeIdleConnections();
   });
 }
