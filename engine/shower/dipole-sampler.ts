@@ -106,7 +106,7 @@ export class DipoleSampler {
    * One long function: split into its parts it took twice as long, because every double that crosses a call which
    * the compiler does not inline becomes an object.
    *
-   * @param random at the start of this step's numbers.
+   * @param random at the start of this step's numbers; after an accepted trial it holds an unused block.
    * @returns false where nothing branches any more down to the lowest t.
    */
   next(state: DipoleState, random: Philox, listener: TrialListener | null): boolean {
@@ -120,10 +120,17 @@ export class DipoleSampler {
     let largestAlphaS = virtuality ? this.alphaSCutoff : windows.alphaS[window];
     let total = this.totalWeight(state);
     let rejected = 0;
+    random.block();
     for (;;) {
+      const wordDistance = random.x0;
+      const wordChoice = random.x1;
+      const wordFraction = random.x2;
+      const wordDecision = random.x3;
+      // the next trial's numbers already now, so that the processor makes them beside this one's logarithms; after an
+      // accepted trial they are the azimuth's
       random.block();
       // distance in units of the expected number of trials, used up window by window
-      let distance = -log(uniform(random.x0));
+      let distance = -log(uniform(wordDistance));
       for (;;) {
         const rate = (largestAlphaS / (2 * PI)) * total;
         const next = lnT - distance / rate;
@@ -148,7 +155,7 @@ export class DipoleSampler {
       const t = exp(lnT);
 
       // which dipole, end, channel and flavour: one uniform number spread over the weights
-      let share = uniform(random.x1) * total;
+      let share = uniform(wordChoice) * total;
       const last = state.dipoles - 1;
       let dipole = 0;
       while (dipole < last && share >= weight[dipole]) share -= weight[dipole++];
@@ -165,7 +172,7 @@ export class DipoleSampler {
 
       // w, y and the kernel over its overestimate
       const q2 = state.q2[dipole];
-      const fraction = uniform(random.x2);
+      const fraction = uniform(wordFraction);
       const relativeLow = low / q2;
       let w = fraction;
       let y = t / q2;
@@ -200,7 +207,7 @@ export class DipoleSampler {
         const alphaS = coupling.atLog(virtuality ? log(kT2) : lnT);
         const slower = alphaS / largestAlphaS;
         ratio = slower * kernel;
-        const u = uniform(random.x3);
+        const u = uniform(wordDecision);
         if (u < ratio) this.alphaS = alphaS;
         else reason = u >= slower ? COUPLING : KERNEL;
       }
@@ -221,7 +228,7 @@ export class DipoleSampler {
         this.rejected = rejected;
         if (channel === G_QQ) {
           const flavour = 1 + Math.floor((share - glueWeight) / (TR / 2));
-          this.flavour = flavour < flavours ? flavour : flavours;
+          this.flavour = Math.min(flavour, flavours);
         }
         return true;
       }

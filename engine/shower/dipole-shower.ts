@@ -153,7 +153,6 @@ export class DipoleShower implements Grower, TrialListener {
   private takeStep(entries: MutableEntries, steps: MutableSteps, step: number, tStart: number): void {
     const { state, sampler, random } = this;
     const { dipole, fromColourEnd, channel, z, w, y } = sampler;
-    random.block();
     const azimuth = 2 * PI * uniform(random.x0);
     const emitter = fromColourEnd ? state.colourEnd[dipole] : state.anticolourEnd[dipole];
     const partner = fromColourEnd ? state.anticolourEnd[dipole] : state.colourEnd[dipole];
@@ -187,7 +186,7 @@ export class DipoleShower implements Grower, TrialListener {
     steps.kT[at] = Math.sqrt(sampler.kT2);
     // s_ij = 2 Ei Ej (1 - cos theta), with s_ij from the bookkeeping: an angle that the momenta can be held against
     const room = 4 * state.after[3] * state.after[7] - sij;
-    steps.openingAngle[at] = 2 * atan2(Math.sqrt(sij), Math.sqrt(room > 0 ? room : 0));
+    steps.openingAngle[at] = 2 * atan2(Math.sqrt(sij), Math.sqrt(Math.max(room, 0)));
     steps.alphaS[at] = sampler.alphaS;
     steps.emitter[at] = emitterRow;
     steps.partner[at] = partnerRow;

@@ -1,7 +1,7 @@
 import { exp, log } from '../math/index.ts';
 import type { RunningCoupling } from '../qcd/index.ts';
 
-const LN_2 = 0.6931471805599453;
+const LN_2 = Math.LN2;
 
 /**
  * The fixed windows of ln 2 in t, from the hard scale down, in which overestimates are constant.
