@@ -1,0 +1,2 @@
+export { inflate } from './inflate.ts';
+export { PlaneDeflater } from './plane-deflater.ts';
