@@ -14,7 +14,12 @@ export interface ColumnSpec {
   readonly meaning: string;
 }
 
-const column = (name: string, kind: ColumnKind, unit: string, meaning: string): ColumnSpec => ({
+const column = <Name extends string>(
+  name: Name,
+  kind: ColumnKind,
+  unit: string,
+  meaning: string,
+): ColumnSpec & { readonly name: Name } => ({
   name,
   kind,
   unit,

@@ -21,6 +21,8 @@ export interface CouplingOptions {
   readonly referenceScale?: number;
   /** Flavour thresholds [GeV], charm below bottom. */
   readonly thresholds?: readonly [number, number];
+  /** Highest scale [GeV] that the table of two-loop running covers, 1e4 unless given; above it each value is solved. */
+  readonly highest?: number;
 }
 
 /** A scale at which the coupling does not exist. */
@@ -102,7 +104,8 @@ export class RunningCoupling {
           );
     this.pole = choice.kind === 'fixed' ? 0 : poleScale(this.segments[0]);
     if (!(lowest > this.pole)) throw new LandauPoleError(lowest, this.pole);
-    if (choice.kind === 'two-loop') this.tabulate(2 * log(lowest), 2 * log(1e6));
+    if (choice.kind === 'two-loop')
+      this.tabulate(2 * log(lowest), 2 * log(Math.max(options.highest ?? 1e4, lowest)));
   }
 
   /**

@@ -160,7 +160,10 @@ function demandCoupling(all: GrowSettings): void {
  * @throws LandauPoleError where the cutoff is not above the pole.
  */
 export function makeCoupling(settings: GrowSettings): RunningCoupling {
-  return new RunningCoupling(settings.coupling, settings.cutoff, { reference: settings.alphasMz });
+  return new RunningCoupling(settings.coupling, settings.cutoff, {
+    reference: settings.alphasMz,
+    highest: settings.energy,
+  });
 }
 
 const QUARK_LETTERS = ['d', 'u', 's', 'c', 'b'] as const;
