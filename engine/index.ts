@@ -59,6 +59,28 @@ export {
   type TrialTable,
 } from './history/index.ts';
 export { branchDipole, twiceDot } from './kinematics/index.ts';
+export {
+  DEFAULT_Y_CUTS,
+  durham,
+  type Estimate,
+  FLOAT_MEASURES,
+  type FloatMeasure,
+  type FractionSpectrum,
+  finalMomenta,
+  INTEGER_MEASURES,
+  type IntegerMeasure,
+  jetCount,
+  MEASURE_DEFINITIONS,
+  type MeasureDefinition,
+  type MeasureKey,
+  measureSteps,
+  SampleSummary,
+  type SampleSummaryResult,
+  StepMeasures,
+  type SymbolPiece,
+  type Thrust,
+  thrust,
+} from './measure/index.ts';
 export { type AngularCoefficients, angularCoefficients } from './processes/index.ts';
 export {
   b0,

@@ -26,6 +26,15 @@ export {
 } from './head.ts';
 export type { EntryTable, History, StepTable, TrialTable } from './history.ts';
 export {
+  aliveEntries,
+  type ColourFault,
+  type ColourLines,
+  colourFaults,
+  coloursAlive,
+  isAlive,
+  stepAtTime,
+} from './replay.ts';
+export {
   CHANNELS,
   type ColumnKind,
   type ColumnSpec,
