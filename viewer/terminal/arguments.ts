@@ -15,12 +15,10 @@ export type Arguments =
  * range passes, and nothing is guessed.
  */
 export function readArguments(command: Command, words: readonly string[]): Arguments {
+  if (words.includes('--help') || words.includes('-h')) return { help: true };
   const { options } = command;
-  const names = Object.keys(options);
-  const kinds: Record<string, { type: 'string' | 'boolean'; short?: string }> = {
-    help: { type: 'boolean', short: 'h' },
-  };
-  for (const name of names) kinds[name] = { type: options[name].takes ? 'string' : 'boolean' };
+  const kinds: Record<string, { type: 'string' | 'boolean' }> = {};
+  for (const name of Object.keys(options)) kinds[name] = { type: options[name].takes ? 'string' : 'boolean' };
   const { tokens } = parseArgs({
     args: [...words],
     options: kinds,
@@ -31,7 +29,6 @@ export function readArguments(command: Command, words: readonly string[]): Argum
 
   const values: Record<string, unknown> = {};
   const operands: string[] = [];
-  if (tokens.some((token) => token.kind === 'option' && token.name === 'help')) return { help: true };
   for (const token of tokens) {
     if (token.kind === 'positional') operands.push(token.value);
     if (token.kind !== 'option') continue;
@@ -63,12 +60,10 @@ const isOption = (word: string): boolean => /^-(-|[a-z])/i.test(word);
 function unknownOption(command: Command, raw: string, name: string): WrongUse {
   const names = Object.keys(command.options);
   const near = nearest(name, names);
-  const meant = near ? `; did you mean --${near}?` : '';
+  const meant = near ? `did you mean --${near}? ` : '';
   const all = names.map((each) => `--${each}`).join(' ');
-  return new WrongUse(
-    'unknown-option',
-    `${raw} is no option of ${command.name}${meant} Its options are: ${all}`.replace(/([^?]) Its/, '$1; its'),
-  );
+  const no = `${raw} is no option of ${command.name}`;
+  return new WrongUse('unknown-option', `${no}; ${meant}its options are ${all}`);
 }
 
 function demand(command: Command, values: Record<string, unknown>, operands: readonly string[]): void {

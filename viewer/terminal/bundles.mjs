@@ -20,7 +20,7 @@ const onlyDependencies = (root) => ({
 const common = (root) => ({
   root,
   configFile: false,
-  envFile: false,
+  envDir: false,
   mode: 'production',
   logLevel: 'warn',
   plugins: [onlyDependencies(root)],

@@ -10,6 +10,7 @@ import {
 } from '../../engine/index.ts';
 import { numberText, type TextColumn, typeset } from './columns.ts';
 import { partonName } from './parton-name.ts';
+import { wrap } from './wrap.ts';
 
 type Spec = { readonly name: string; readonly kind: string; readonly unit: string };
 type Table = { readonly length: number };
@@ -50,7 +51,8 @@ function tableText(
     } else {
       columns.push({ name, unit: shown, cells: values.map(String), align: 'number' });
     }
-    if (name === 'id') columns.push({ name: '', unit: '', cells: values.map(partonName), align: 'word' });
+    if (name === 'id')
+      columns.push({ name: 'particle', unit: '', cells: values.map(partonName), align: 'word' });
   }
   return typeset(columns);
 }
@@ -62,31 +64,37 @@ function momentumText(value: number): string {
   return Number(text) === 0 ? text.replace('-', '') : text;
 }
 
+/** A number in at most six digits, without the zeros that a column would need. */
+const shortNumber = (value: number): string => String(Number(value.toPrecision(6)));
+
+const counted = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;
+
 /** The head of a file as aligned lines. */
 export function headText(head: SampleHead): string {
   const unit = head.meaning.tUnit ?? '';
   const shower = Object.entries(head.shower).map(([name, value]) => `${name} ${value ?? '-'}`);
   const rows: [string, string][] = [
     ['producer', `${head.producer.name} ${head.producer.version}`],
-    ['beams', head.beams.map(({ id, e }) => `${partonName(id)} (${numberText(e)} GeV)`).join(' ')],
-    ['sqrtS', `${numberText(head.sqrtS)} GeV`],
+    ['beams', head.beams.map(({ id, e }) => `${partonName(id)} ${shortNumber(e)} GeV`).join(', ')],
+    ['sqrtS', `${shortNumber(head.sqrtS)} GeV`],
     ['evolution', `${head.evolutionVariable}, ordering ${head.ordering}`],
-    ['hardScale', `${numberText(head.hardScale)} ${unit}`],
-    ['cutoff', `${numberText(head.cutoff)} GeV^2`],
-    ['tLow', `${numberText(head.tLow)} ${unit}`],
+    ['hardScale', `${shortNumber(head.hardScale)} ${unit}`],
+    ['cutoff', `${shortNumber(head.cutoff)} GeV^2`],
+    ['tLow', `${shortNumber(head.tLow)} ${unit}`],
     ['shower', shower.join(', ')],
     ['seed', String(head.seed ?? '-')],
   ];
-  return rows.map(([name, text]) => `  ${name.padEnd(12)}${text}`).join('\n');
+  return rows.map(([name, text]) => `  ${name.padEnd(12)}${wrap(text, 14)}`).join('\n');
 }
 
 function titleOf({ head, entries, steps }: History): string {
-  const process = `${head.process.incoming.map(partonName).join(' ')} -> ${head.process.outgoing.map(partonName).join(' ')}`;
+  const { incoming, outgoing } = head.process;
+  const process = `${incoming.map(partonName).join(' ')} -> ${outgoing.map(partonName).join(' ')}`;
   const status =
     head.status === 'complete' ? '' : `, ${head.status}: ${head.statusReason ?? 'no reason given'}`;
   const label = head.label === null ? '' : ` "${head.label}"`;
-  const weight = head.weight === 1 ? '' : `, weight ${numberText(head.weight)}`;
-  const size = `${steps.length} steps, ${entries.length} entries`;
+  const weight = head.weight === 1 ? '' : `, weight ${shortNumber(head.weight)}`;
+  const size = `${counted(steps.length, 'step', 'steps')}, ${counted(entries.length, 'entry', 'entries')}`;
   return `event ${head.event}${label}: ${process}, ${size}${weight}${status}`;
 }
 

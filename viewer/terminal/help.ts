@@ -1,21 +1,6 @@
 import type { Command } from './command.ts';
 import type { Option } from './option.ts';
-
-const WIDTH = 96;
-
-function wrap(text: string, indent: number): string {
-  const lines: string[] = [];
-  let line = '';
-  for (const word of text.split(' ')) {
-    if (line && indent + line.length + 1 + word.length > WIDTH) {
-      lines.push(line);
-      line = word;
-    } else {
-      line = line ? `${line} ${word}` : word;
-    }
-  }
-  return [...lines, line].join(`\n${' '.repeat(indent)}`);
-}
+import { wrap } from './wrap.ts';
 
 /** Two columns, the second wrapped. */
 function pairs(rows: readonly (readonly [string, string])[]): string {

@@ -1,4 +1,3 @@
-import { VERSION } from '../../engine/index.ts';
 import { readArguments } from './arguments.ts';
 import type { Command, Place } from './command.ts';
 import { DONE, explain, WrongUse } from './errors.ts';
@@ -68,6 +67,7 @@ async function dispatch(first: string | undefined, rest: readonly string[], plac
     return DONE;
   }
   if (first === '--version') {
+    const { VERSION } = await import('../../engine/index.ts');
     await print(`branchlight ${VERSION}\n`);
     return DONE;
   }
@@ -87,6 +87,6 @@ function noCommand(first: string | undefined): WrongUse {
   const takes = `the commands are ${names.join(', ')}`;
   if (first === undefined) return new WrongUse('unknown-command', `a command is needed; ${takes}`);
   const near = nearest(first, names);
-  const meant = near ? `; did you mean ${near}?` : '';
-  return new WrongUse('unknown-command', `there is no command ${first}${meant} (${takes})`);
+  const meant = near ? `did you mean ${near}? ` : '';
+  return new WrongUse('unknown-command', `there is no command ${first}; ${meant}${takes}`);
 }
