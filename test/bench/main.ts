@@ -1,4 +1,5 @@
 import { type EngineFigures, engineTable } from './engine.ts';
+import { type StartFigures, startTable } from './start-up.ts';
 
 function printEngine(rows: readonly EngineFigures[]): void {
   console.log('engine, one thread, all columns recorded, fastest of eight rounds');
@@ -20,8 +21,15 @@ function printEngine(rows: readonly EngineFigures[]): void {
   }
 }
 
+function printStart(rows: readonly StartFigures[]): void {
+  console.log('start-up, median of nine, and over a bare node');
+  for (const { words, ms, ratio } of rows)
+    console.log(`${ms.toFixed(0).padStart(6)} ms ${ratio.toFixed(2).padStart(6)}   ${words}`);
+}
+
 const parts: Record<string, () => void | Promise<void>> = {
   engine: () => printEngine(engineTable()),
+  'start-up': () => printStart(startTable()),
 };
 
 const asked = process.argv.slice(2);

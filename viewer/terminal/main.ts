@@ -1,45 +1,11 @@
 import { readArguments } from './arguments.ts';
-import type { Command, Place } from './command.ts';
+import type { Place } from './command.ts';
+import { COMMANDS } from './commands.ts';
 import { DONE, explain, WrongUse } from './errors.ts';
 import { commandHelp, overview } from './help.ts';
 import { watchInterruptions } from './interruption.ts';
 import { nearest } from './nearest.ts';
 import { endWithReader, print } from './streams.ts';
-
-interface Entry {
-  readonly name: string;
-  readonly purpose: string;
-  load(): Promise<Command>;
-}
-
-// Purposes are said here as well, so that the overview loads no command. A test holds them against the commands.
-const COMMANDS: readonly Entry[] = [
-  {
-    name: 'grow',
-    purpose: 'simulate events and record their histories',
-    load: async () => (await import('./grow.ts')).grow,
-  },
-  {
-    name: 'show',
-    purpose: "print a file's head and the entries and steps of its events",
-    load: async () => (await import('./show.ts')).show,
-  },
-  {
-    name: 'summary',
-    purpose: 'sample means with statistical errors; reads and verifies every chunk',
-    load: async () => (await import('./summary.ts')).summary,
-  },
-  {
-    name: 'view',
-    purpose: 'serve the viewer on the loopback address and print its address',
-    load: async () => (await import('./view.ts')).view,
-  },
-  {
-    name: 'convert',
-    purpose: 'write what is whole of a damaged file as a new one',
-    load: async () => (await import('./convert.ts')).convert,
-  },
-];
 
 /**
  * The whole command line.
