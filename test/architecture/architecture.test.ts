@@ -309,7 +309,12 @@ describe('the checker', () => {
       { 'viewer/scene/build/a.ts': `export type A = HTMLCanvasElement;` },
       ['pure viewer/scene/build/a.ts'],
     ],
-    ['the network, from formats', { 'formats/a.ts': `export const a = process.env;` }, ['pure formats/a.ts']],
+    [
+      'the network, from the engine',
+      { 'engine/constants.ts': `export const CF = fetch('x');` },
+      ['pure engine/constants.ts'],
+    ],
+    ['Node, from formats', { 'formats/a.ts': `export const a = process.env;` }, ['pure formats/a.ts']],
     [
       'a package before it is installed',
       { 'viewer/terminal/set-up.mjs': `import 'vite'; export const setUp = 1;` },

@@ -3,7 +3,7 @@ import { globalReferences, lineAt, type Node, parse, walk } from './syntax.ts';
 
 /** Where the same input must give the same bits in every JavaScript engine. */
 const SAME_BITS = /^(engine|viewer\/layout|viewer\/marks|viewer\/figure)\//;
-/** Where nothing of the screen may be touched, besides. */
+/** Where neither the screen nor Node may be touched. */
 const PURE = /^(engine|formats|viewer\/(layout|marks|figure|scene\/build))\//;
 
 /** The members of Math that the language defines to the last bit. Its constants are doubles, the same everywhere. */
@@ -16,10 +16,13 @@ const CLOCKS = new Set(
   'Date performance setTimeout setInterval setImmediate requestAnimationFrame queueMicrotask'.split(' '),
 );
 const SCREEN = new Set(
-  'window document navigator location history self screen localStorage sessionStorage indexedDB fetch XMLHttpRequest Worker customElements process Buffer crypto require'.split(
+  'window document navigator location history self screen localStorage sessionStorage customElements'.split(
     ' ',
   ),
 );
+const NODE = new Set('process Buffer require'.split(' '));
+/** Of the world outside, in Node and in browsers alike: formats may read from it, the rest may not. */
+const WORLD = new Set('fetch XMLHttpRequest WebSocket Worker crypto indexedDB globalThis'.split(' '));
 const ELEMENT = /^((HTML|SVG)\w*Element|Element|Node|ShadowRoot|CustomEvent|EventTarget|WebGL\w+)$/;
 
 function mathFault(node: Node, parent: Node): string | null {
@@ -41,10 +44,12 @@ export function numericsBreaches(files: SourceSet): Breach[] {
     };
     const sameBits = SAME_BITS.test(file);
     for (const { name, node, parent } of globalReferences(program)) {
-      if (SCREEN.has(name) || ELEMENT.test(name)) refuse('pure', node, `${name} is of the outside world`);
+      if (SCREEN.has(name) || ELEMENT.test(name)) refuse('pure', node, `${name} is of the screen`);
+      else if (NODE.has(name)) refuse('pure', node, `${name} is of Node`);
+      else if (WORLD.has(name) && !file.startsWith('formats/'))
+        refuse('pure', node, `${name} is of the world outside`);
       if (!sameBits) continue;
       if (CLOCKS.has(name)) refuse('numerics', node, `${name} is a clock`);
-      if (name === 'globalThis') refuse('pure', node, 'globalThis hides what is used');
       if (name === 'Math') {
         const message = mathFault(node, parent);
         if (message !== null) refuse('numerics', node, message);
