@@ -61,8 +61,12 @@ export class DipoleSampler {
   private readonly alphaSCutoff: number;
   private readonly windows: EvolutionWindows;
   private window = 0;
-  /** Dipole to ln Q^2, to the integral of the soft shape over w, and to the weight of both ends. */
+  /** Dipole to ln Q^2, 1/Q^2, and the weights of both ends: that of the soft shape, and that which is flat in z. */
   private lnQ2 = new Float64Array(64);
+  private perQ2 = new Float64Array(64);
+  private softWeight = new Float64Array(64);
+  private flatWeight = new Float64Array(64);
+  /** Dipole to the integral of the soft shape over w, and to the weight of both ends, in the present window. */
   private shape = new Float64Array(64);
   private weight = new Float64Array(64);
 
@@ -96,7 +100,7 @@ export class DipoleSampler {
     for (let n = 0; n < state.touchedCount; n++) {
       const dipole = state.touched[n];
       this.enter(state, dipole);
-      this.weigh(state, dipole);
+      this.weigh(dipole);
     }
   }
 
@@ -171,11 +175,11 @@ export class DipoleSampler {
       const channel = gluon ? (share < glueWeight || flavours === 0 ? G_GG : G_QQ) : Q_QG;
 
       // w, y and the kernel over its overestimate
-      const q2 = state.q2[dipole];
+      const perQ2 = this.perQ2[dipole];
       const fraction = uniform(wordFraction);
-      const relativeLow = low / q2;
+      const relativeLow = low * perQ2;
       let w = fraction;
-      let y = t / q2;
+      let y = t * perQ2;
       let kT2 = t;
       let soft = 1;
       if (virtuality) {
@@ -244,33 +248,36 @@ export class DipoleSampler {
 
   private enter(state: DipoleState, dipole: number): void {
     if (dipole >= this.weight.length) this.growWeights(dipole);
-    this.lnQ2[dipole] = log(state.q2[dipole]);
+    const q2 = state.q2[dipole];
+    this.lnQ2[dipole] = log(q2);
+    this.perQ2[dipole] = 1 / q2;
+    const gluons =
+      (state.id[state.colourEnd[dipole]] === GLUON ? 1 : 0) +
+      (state.id[state.anticolourEnd[dipole]] === GLUON ? 1 : 0);
+    this.softWeight[dipole] = (this.virtuality ? 1 : 0.5) * (gluons * CA + (2 - gluons) * 2 * CF);
+    this.flatWeight[dipole] = gluons * this.flavours * (TR / 2);
   }
 
   private weighAll(state: DipoleState): void {
-    for (let dipole = 0; dipole < state.dipoles; dipole++) this.weigh(state, dipole);
+    const { dipoles } = state;
+    for (let dipole = 0; dipole < dipoles; dipole++) this.weigh(dipole);
   }
 
-  private weigh(state: DipoleState, dipole: number): void {
-    const q2 = state.q2[dipole];
+  private weigh(dipole: number): void {
     const low = this.windows.low[this.window];
-    const { virtuality, flavours } = this;
-    if (virtuality ? low >= q2 : 4 * low >= q2) {
+    const relativeLow = low * this.perQ2[dipole];
+    const { virtuality } = this;
+    if (relativeLow >= (virtuality ? 1 : 0.25)) {
       this.weight[dipole] = 0;
       return;
     }
     // kt: the integral over 0 < w < 1 is ln(Q^2/low + 1); taking ln(Q^2/low) + low/Q^2 instead, w a little above 1 is
     // thrown too and refused, and no window costs a logarithm
     const shape = virtuality
-      ? log((q2 + low) / (this.lowestW(low) * q2 + low))
-      : this.lnQ2[dipole] - this.windows.lnLow[this.window] + low / q2;
+      ? log((1 + relativeLow) / (this.lowestW(low) + relativeLow))
+      : this.lnQ2[dipole] - this.windows.lnLow[this.window] + relativeLow;
     this.shape[dipole] = shape;
-    const softCharge = virtuality ? 1 : 0.5;
-    const glue = CA * softCharge * shape + flavours * (TR / 2);
-    const quark = 2 * CF * softCharge * shape;
-    this.weight[dipole] =
-      (state.id[state.colourEnd[dipole]] === GLUON ? glue : quark) +
-      (state.id[state.anticolourEnd[dipole]] === GLUON ? glue : quark);
+    this.weight[dipole] = this.softWeight[dipole] * shape + this.flatWeight[dipole];
   }
 
   private growWeights(dipole: number): void {
@@ -280,6 +287,9 @@ export class DipoleSampler {
       return wider;
     };
     this.lnQ2 = widen(this.lnQ2);
+    this.perQ2 = widen(this.perQ2);
+    this.softWeight = widen(this.softWeight);
+    this.flatWeight = widen(this.flatWeight);
     this.shape = widen(this.shape);
     this.weight = widen(this.weight);
   }
