@@ -178,7 +178,7 @@ function transverse(out: DipoleInvariants, rapidityFactor: number): void {
   const iSpan = ix * span[0] + iy * span[1] + iz * span[2];
   let phi = atan2(sine(2, s, t), cosine(2, r, i2, iSpan, span2));
   if (phi < 0) phi += 2 * PI;
-  out.azimuth = phi < 2 * PI ? phi : 0;
+  out.azimuth = phi >= 2 * PI ? 0 : phi;
 
   const jx = direction[9] - ux;
   const jy = direction[10] - uy;
