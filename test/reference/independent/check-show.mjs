@@ -25,7 +25,6 @@ const dot3 = (a, b) => a[0] * b[0] + a[1] * b[1] + a[2] * b[2];
 const cross3 = (a, b) => [a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]];
 const length3 = (a) => Math.hypot(a[0], a[1], a[2]);
 const angle = (a, b) => Math.atan2(length3(cross3(a, b)), dot3(a, b));
-const minkowski = (a, b) => a[3] * b[3] - dot3(a, b);
 const combine = (fa, a, fb, b, fc, c) => a.map((x, n) => fa * x + fb * b[n] + fc * c[n]);
 
 // Product of two massless momenta from their angle: keeps its digits however close they are.
@@ -34,39 +33,33 @@ function massless(a, b) {
   return 2 * length3(a) * length3(b) * s * s;
 }
 
-function toRest(p, frame) {
-  const mass = Math.sqrt(minkowski(frame, frame));
-  const along = dot3(frame, p) / mass;
-  const factor = (along / (1 + frame[3] / mass) - p[3]) / mass;
-  return [0, 1, 2].map((n) => p[n] + factor * frame[n]);
+// The part of the emission's momentum orthogonal to both ends of the dipole, without any use of y or z:
+// pj = a pij + b pk - k with pj.pj = 0 gives kT^2 = 2 a b pij.pk = 2 (pj.pk)(pj.pij)/(pij.pk).
+function transverse(emission, emitter, partner) {
+  const product = massless(emitter, partner);
+  const a = massless(emission, partner) / product;
+  const b = massless(emission, emitter) / product;
+  return { k: combine(-1, emission, a, emitter, b, partner), kT: Math.sqrt(2 * a * b * product), product };
 }
 
-// Azimuths of the transverse vector k: one, or more where two space axes tie within rounding.
-function azimuths(k, emitter, partner) {
-  const product = massless(emitter, partner);
-  const total = combine(1, emitter, 1, partner, 0, emitter);
-  const axis = toRest(emitter, total);
-  const candidates = [2, 1, 0].map((direction) => {
-    const r = [0, 0, 0, 0];
-    r[direction] = 1;
-    const n = combine(
-      1,
-      r,
-      -minkowski(r, partner) / product,
-      emitter,
-      -minkowski(r, emitter) / product,
-      partner,
-    );
-    return { n, size: Math.abs(minkowski(n, n)) };
-  });
-  const largest = Math.max(...candidates.map((c) => c.size));
-  const inRest = toRest(k, total);
-  return candidates
-    .filter((c) => c.size > largest * (1 - 1e-9))
-    .map((c) => {
-      const n1 = toRest(c.n, total);
-      const n2 = cross3(axis, n1);
-      const phi = Math.atan2(dot3(inRest, n2) / length3(axis), dot3(inRest, n1));
+// Azimuths that the rows allow: one, or more where two space axes tie within rounding. For the space axis r,
+// -n.n = 1 + 2 pij_r pk_r/(pij.pk), and k.n = k.r because k is orthogonal to the dipole, so that
+// cos phi = k_r/(kT sqrt(-n.n)). The sine is the determinant of r, pij, pk and pj, which for massless momenta is the
+// area spanned by their directions as seen along r: differences of unit vectors keep their digits in narrow dipoles.
+function azimuths(emission, emitter, partner) {
+  const { k, kT, product } = transverse(emission, emitter, partner);
+  const direction = (p) => [p[0] / p[3], p[1] / p[3], p[2] / p[3]];
+  const [a, b, j] = [emitter, partner, emission].map(direction);
+  const away = (from) => from.map((x, n) => x - j[n]);
+  const area = cross3(away(a), away(b));
+  const sizes = [0, 1, 2].map((r) => 1 + (2 * emitter[r] * partner[r]) / product);
+  const largest = Math.max(...sizes);
+  return [0, 1, 2]
+    .filter((r) => sizes[r] > largest * (1 - 1e-9))
+    .map((r) => {
+      const norm = kT * Math.sqrt(sizes[r]);
+      const sine = (-emitter[3] * partner[3] * emission[3] * area[r]) / (product * norm);
+      const phi = Math.atan2(sine, k[r] / norm);
       return phi < 0 ? phi + 2 * Math.PI : phi;
     });
 }
@@ -207,18 +200,8 @@ function checkStep(history, s, report) {
   report.measure('y', s, Math.abs(y / steps.y[s] - 1));
   report.measure('z', s, Math.abs(z - steps.z[s]));
   report.measure('t', s, Math.abs(t / steps.t[s] - 1));
-  // The part of pj orthogonal to both ends of the dipole: no use of y or z.
-  const product = q2 / 2;
-  const transverse = combine(
-    -1,
-    pj,
-    minkowski(pj, partner) / product,
-    before,
-    minkowski(pj, before) / product,
-    partner,
-  );
-  report.measure('kT', s, Math.abs(Math.sqrt(-minkowski(transverse, transverse)) / steps.kT[s] - 1));
-  const phis = azimuths(transverse, before, partner);
+  report.measure('kT', s, Math.abs(transverse(pj, before, partner).kT / steps.kT[s] - 1));
+  const phis = azimuths(pj, before, partner);
   report.measure('azimuth', s, Math.min(...phis.map((phi) => apart(phi, steps.azimuth[s]))));
   report.demand('azimuth lies in [0, 2 pi)', s, steps.azimuth[s] >= 0 && steps.azimuth[s] < 2 * Math.PI);
   report.measure('openingAngle', s, Math.abs(angle(pi, pj) / steps.openingAngle[s] - 1));
