@@ -83,6 +83,8 @@ export {
 } from './measure/index.ts';
 export { type AngularCoefficients, angularCoefficients } from './processes/index.ts';
 export {
+  antennaAverage,
+  antennaShare,
   b0,
   b1,
   type CouplingChoice,

@@ -1,3 +1,4 @@
+export { antennaAverage, antennaShare } from './antenna.ts';
 export { kernelGluon, kernelGluonToQuarks, kernelQuark } from './kernels.ts';
 export {
   b0,
