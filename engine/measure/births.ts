@@ -51,7 +51,8 @@ function isDecayAtRest(entries: EntryTable): boolean {
   let y = 0;
   let z = 0;
   let energy = 0;
-  for (let row = 0; row < entries.length && madeBy[row] < 0; row++) {
+  for (let row = 0; row < entries.length; row++) {
+    if (madeBy[row] >= 0) continue;
     if (role[row] === INCOMING && (colour[row] !== 0 || anticolour[row] !== 0)) return false;
     if (role[row] !== HARD) continue;
     x += px[row];

@@ -1,5 +1,5 @@
 import { log } from '../math/index.ts';
-import { peakOfHump } from './hump.ts';
+import { findHump, peakInWindow } from './hump.ts';
 
 /** Histogram of ln(1/x) of the final partons, x = 2E/sqrt(s). */
 export interface FractionSpectrum {
@@ -38,26 +38,33 @@ export class FractionSpectrumCollector {
   }
 
   /**
-   * Histogram and peak so far.
+   * Histogram and peak so far; the peak is NaN where there is no hump.
    *
    * The error of the peak is the jackknife's over 40 groups of events (event n in group n mod 40), so that partons of
-   * one event may be correlated; it is itself uncertain by about 11 percent. NaN where there are fewer events than
-   * groups, or where the hump of some group's complement cannot be found.
+   * one event may be correlated; the window of the fit is that of the whole sample. The error is itself uncertain by
+   * about 11 percent. NaN below 40 events.
    */
   spectrum(): FractionSpectrum {
     const counts = new Float64Array(BINS);
     for (const group of this.groups) for (let bin = 0; bin < BINS; bin++) counts[bin] += group[bin];
-    const position = (bins: Float64Array) => peakOfHump(bins, BINS_PER_UNIT);
-    let scatter = NaN;
-    if (this.events >= GROUPS) {
-      const without = this.groups.map((group) => position(counts.map((count, bin) => count - group[bin])));
-      const mean = without.reduce((sum, value) => sum + value, 0) / GROUPS;
-      scatter = without.reduce((sum, value) => sum + (value - mean) * (value - mean), 0);
-    }
     return {
       edges: Array.from({ length: BINS + 1 }, (_, edge) => edge / BINS_PER_UNIT),
       counts: Array.from(counts),
-      peak: { mean: position(counts), error: Math.sqrt((scatter * (GROUPS - 1)) / GROUPS) },
+      peak: this.peak(counts),
     };
+  }
+
+  private peak(counts: Float64Array): FractionSpectrum['peak'] {
+    const hump = findHump(counts, BINS_PER_UNIT);
+    if (hump === null) return { mean: NaN, error: NaN };
+    const mean = peakInWindow(counts, BINS_PER_UNIT, hump);
+    if (this.events < GROUPS) return { mean, error: NaN };
+    const without = this.groups.map((group) => {
+      const rest = counts.map((count, bin) => count - group[bin]);
+      return peakInWindow(rest, BINS_PER_UNIT, hump);
+    });
+    const centre = without.reduce((sum, value) => sum + value, 0) / GROUPS;
+    const scatter = without.reduce((sum, value) => sum + (value - centre) * (value - centre), 0);
+    return { mean, error: Math.sqrt((scatter * (GROUPS - 1)) / GROUPS) };
   }
 }

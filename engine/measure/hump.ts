@@ -7,22 +7,27 @@ const NEIGHBOURHOOD = 0.5;
 const SHARE = 0.7;
 const TERMS = 4;
 
+/** The bins around the hump of a histogram that a fit takes: low to high, both included, and the highest. */
+export interface HumpWindow {
+  readonly low: number;
+  readonly top: number;
+  readonly high: number;
+}
+
 /**
- * Position of the hump of a histogram: the maximum of a cubic fitted to the logarithm of its counts.
+ * Find the hump of a histogram.
  *
  * @param counts bins of equal width from 0 on.
- * @returns in units of the axis, NaN where there is no hump: no place that is higher than all within half a unit on
- * both sides, once averaged over five bins of 0.1.
+ * @returns null where there is no hump: no place that is higher than all within half a unit on both sides, once averaged
+ * over five bins of 0.1.
  *
- * The highest such place is taken, which leaves out the edge at 0 where the leading partons pile up. The fit covers
- * the bins around it with more than 0.7 of its averaged height, on the side of 0 no further than the dip before it,
- * each weighted by its counts. A cubic because the spectrum is skewed: a parabola misses the maximum by up to 0.2
- * at 91 GeV, the cubic by less than 0.02.
+ * The highest such place is taken, which leaves out the edge at 0 where the leading partons pile up. The window covers
+ * the bins around it with more than 0.7 of its averaged height, on the side of 0 no further than the dip before it.
  */
-export function peakOfHump(counts: Float64Array, binsPerUnit: number): number {
-  const top = findHump(counts, binsPerUnit);
-  if (top < 0) return NaN;
+export function findHump(counts: Float64Array, binsPerUnit: number): HumpWindow | null {
   const smooth = smoothed(counts, Math.round(SMOOTHING * binsPerUnit));
+  const top = highestMaximum(smooth, Math.round(NEIGHBOURHOOD * binsPerUnit));
+  if (top < 0) return null;
   let low = top;
   let dip = top;
   while (low > 0 && smooth[low - 1] >= SHARE * smooth[top]) {
@@ -33,6 +38,22 @@ export function peakOfHump(counts: Float64Array, binsPerUnit: number): number {
   if (smooth[low] > smooth[dip]) low = dip;
   let high = top;
   while (high + 1 < counts.length && smooth[high + 1] >= SHARE * smooth[top]) high++;
+  return { low, top, high };
+}
+
+/**
+ * Position of the hump in a window: the maximum of a cubic fitted to the logarithm of the counts, weighted by them.
+ *
+ * @returns in units of the axis, NaN where the fit has no maximum in the window.
+ *
+ * A cubic because the spectrum is skewed: a parabola misses the maximum by up to 0.2 at 91 GeV, the cubic by less
+ * than 0.02.
+ */
+export function peakInWindow(
+  counts: Float64Array,
+  binsPerUnit: number,
+  { low, top, high }: HumpWindow,
+): number {
   const half = Math.max(top - low, high - top);
   const fit = fitLogCubic(counts, low, high, top, half);
   const at = fit ? maximumOfCubic(fit) : NaN;
@@ -40,11 +61,9 @@ export function peakOfHump(counts: Float64Array, binsPerUnit: number): number {
 }
 
 /** The highest bin that is a maximum of its neighbourhood, -1 for none. */
-function findHump(counts: Float64Array, binsPerUnit: number): number {
-  const smooth = smoothed(counts, Math.round(SMOOTHING * binsPerUnit));
-  const reach = Math.round(NEIGHBOURHOOD * binsPerUnit);
+function highestMaximum(smooth: Float64Array, reach: number): number {
   let top = -1;
-  for (let bin = reach; bin + reach < counts.length; bin++) {
+  for (let bin = reach; bin + reach < smooth.length; bin++) {
     if (top >= 0 && smooth[bin] <= smooth[top]) continue;
     let highest = smooth[bin] > smooth[bin - reach] && smooth[bin] > smooth[bin + reach];
     for (let other = bin - reach; highest && other <= bin + reach; other++)

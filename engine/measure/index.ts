@@ -8,9 +8,10 @@ export {
 export { type DipoleInvariants, dipoleInvariants, makeDipoleInvariants } from './dipole-invariants.ts';
 export { durham, jetCount } from './durham.ts';
 export { finalMomenta } from './final-momenta.ts';
-export type { FractionSpectrum } from './fraction-spectrum.ts';
+export { type FractionSpectrum, FractionSpectrumCollector } from './fraction-spectrum.ts';
+export { findHump, type HumpWindow, peakInWindow } from './hump.ts';
 export { measureSteps } from './measure-steps.ts';
-export type { Estimate } from './ratio-mean.ts';
+export { type Estimate, RatioMean } from './ratio-mean.ts';
 export { DEFAULT_Y_CUTS, SampleSummary, type SampleSummaryResult } from './sample-summary.ts';
 export {
   FLOAT_MEASURES,
