@@ -150,7 +150,7 @@ export class Store {
       if (question !== this.#question) return;
       const measures = this.#parts.measure(history);
       const { hardScale, tLow } = history.head;
-      this.playhead.load(measures.evolutionTime, log(hardScale / tLow));
+      this.playhead.load(measures.evolutionTime.subarray(0, history.steps.length), log(hardScale / tLow));
       this.#set({ history, measures, step: -1 });
       if (step >= 0 && step < history.steps.length) this.playhead.rest(step);
     } catch (error) {

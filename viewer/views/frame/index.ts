@@ -1,0 +1,1 @@
+export { BoxSize } from './box-size.ts';

@@ -1,0 +1,1 @@
+export { NoticeElement } from './notice.ts';
