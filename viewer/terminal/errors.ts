@@ -6,8 +6,8 @@ export const INTERRUPTED = 130;
 
 /** The caller asked for something that cannot be; the message names the option or argument and what it takes. */
 export class WrongUse extends Error {
-  readonly code: string;
-  constructor(code: string, message: string) {
+  readonly code: Code;
+  constructor(code: Code, message: string) {
     super(message);
     this.code = code;
   }
@@ -15,18 +15,20 @@ export class WrongUse extends Error {
 
 /** A file, stream or port could not be used; the message names it and what was expected. */
 export class Trouble extends Error {
-  readonly code: string;
-  constructor(code: string, message: string) {
+  readonly code: Code;
+  constructor(code: Code, message: string) {
     super(message);
     this.code = code;
   }
 }
 
-/**
- * Every code of the command line itself with its exit status and what helps, in the order of the README's table. The
- * codes of damaged files are those of formats/shower-file, of senseless settings those of the engine.
- */
-export const CODES: Readonly<Record<string, { readonly status: number; readonly remedy: string }>> = {
+interface Remedy {
+  readonly status: number;
+  readonly remedy: string;
+}
+
+/** Every code with its exit status and what helps, in the order of the README's table, which a test compares. */
+export const CODES = {
   'unknown-command': { status: WRONG_USE, remedy: 'take one of the commands that the message lists' },
   'unknown-option': { status: WRONG_USE, remedy: 'take one of the options that the message lists' },
   'repeated-option': { status: WRONG_USE, remedy: 'give the option once' },
@@ -37,41 +39,57 @@ export const CODES: Readonly<Record<string, { readonly status: number; readonly 
   },
   'needless-value': { status: WRONG_USE, remedy: 'leave the value out: the option is a switch' },
   'bad-value': { status: WRONG_USE, remedy: 'give a value of the kind that the message names' },
+  setting: {
+    status: WRONG_USE,
+    remedy: 'change the setting, or the one that it clashes with, as the message says',
+  },
   'missing-argument': { status: WRONG_USE, remedy: 'name the file; `-` is standard input' },
   'extra-argument': { status: WRONG_USE, remedy: 'give only the arguments that the usage line shows' },
   'no-such-event': { status: WRONG_USE, remedy: 'ask for an event that the file holds; numbers start at 0' },
-  'unknown-format': { status: WRONG_USE, remedy: 'name the format with --from or --to' },
+  'unknown-format': { status: WRONG_USE, remedy: 'name the format with `--from` or `--to`' },
   'binary-to-terminal': { status: WRONG_USE, remedy: 'send standard output to a file or a pipe' },
   'input-is-terminal': { status: WRONG_USE, remedy: 'pipe a file into standard input' },
-  'port-taken': { status: WRONG_USE, remedy: 'leave --port out, or give one that is free' },
+  'port-taken': { status: WRONG_USE, remedy: 'leave `--port` out, or give one that is free' },
   'cannot-read': { status: FILE_TROUBLE, remedy: 'check the name of the file and the right to read it' },
   'cannot-write': { status: FILE_TROUBLE, remedy: 'check folder, space and the right to write' },
-  'cannot-serve': { status: FILE_TROUBLE, remedy: 'check that this machine allows to listen on 127.0.0.1' },
+  'cannot-serve': { status: FILE_TROUBLE, remedy: 'check that this machine allows listening on 127.0.0.1' },
+  'foreign-file': { status: FILE_TROUBLE, remedy: 'give a `.shower` file: this one is something else' },
+  'newer-version': { status: FILE_TROUBLE, remedy: 'update Branchlight: a later one wrote the file' },
+  'truncated-file': {
+    status: FILE_TROUBLE,
+    remedy: 'get the file anew, or save what is whole with `branchlight convert`',
+  },
+  'wrong-checksum': {
+    status: FILE_TROUBLE,
+    remedy: 'get the file anew, or save what is whole with `branchlight convert`',
+  },
+  'malformed-file': { status: FILE_TROUBLE, remedy: 'tell whoever wrote the program that wrote the file' },
+  'beyond-format': { status: FILE_TROUBLE, remedy: 'split the sample: the format cannot hold so much' },
   'set-up-failed': { status: FILE_TROUBLE, remedy: 'read what npm or the build said above the message' },
   internal: { status: FILE_TROUBLE, remedy: 'report it, with the command: it is a fault of this program' },
-};
+  interrupted: {
+    status: INTERRUPTED,
+    remedy: 'none needed: what was finished is kept where the message says',
+  },
+} as const satisfies Record<string, Remedy>;
 
-interface Coded {
-  readonly code?: unknown;
-  readonly message: string;
-  readonly option?: unknown;
-  readonly found?: unknown;
-  readonly expected?: unknown;
-  readonly file?: unknown;
-  readonly byte?: unknown;
-}
+/** A code that an error of the command line carries. */
+export type Code = keyof typeof CODES;
 
-/** What to say about an error and the exit status that goes with it; never a stack trace. */
+const isCode = (code: unknown): code is Code => typeof code === 'string' && Object.hasOwn(CODES, code);
+
+/**
+ * What to say about an error and the exit status that goes with it; never a stack trace.
+ *
+ * The errors of the layers below carry codes of the same list (`ShowerFileError`, `SettingError`); whatever carries none
+ * is a fault of ours.
+ */
 export function explain(thrown: unknown): { readonly message: string; readonly status: number } {
-  const error = (thrown instanceof Error ? thrown : new Error(String(thrown))) as Coded;
-  const code = typeof error.code === 'string' ? error.code : 'internal';
-  const message = `${error.message} (${code})`;
-  if (error instanceof WrongUse) return { message, status: WRONG_USE };
-  if (error instanceof Trouble) return { message, status: FILE_TROUBLE };
-  // Errors of the layers below are told by what they carry: a setting names its option, a damaged file its byte.
-  if (error.option !== undefined) return { message, status: WRONG_USE };
-  if (error.byte !== undefined) return { message, status: FILE_TROUBLE };
-  return { message: `${error.message} (internal)`, status: FILE_TROUBLE };
+  const { message, code } = (thrown instanceof Error ? thrown : new Error(String(thrown))) as Error & {
+    readonly code?: unknown;
+  };
+  const known = isCode(code) ? code : 'internal';
+  return { message: `${message} (${known})`, status: CODES[known].status };
 }
 
 const WORDS: Readonly<Record<string, string>> = {
