@@ -1,6 +1,7 @@
 import { PI } from '../constants.ts';
 import { type EntryTable, type History, ROLES } from '../history/index.ts';
-import { angleBetween, PACKED, packRow } from './packed-momenta.ts';
+import { angleBetween } from '../math/index.ts';
+import { PACKED, packRow } from './packed-momenta.ts';
 
 const INCOMING = ROLES.indexOf('incoming');
 const HARD = ROLES.indexOf('hard');
@@ -82,7 +83,7 @@ function anglesToHardPartners(entries: EntryTable): Float64Array {
           (anticolour[a] !== 0 && anticolour[a] === anticolour[b]);
       if (a === b || !joined) continue;
       packRow(pair, PACKED, entries, b);
-      const angle = angleBetween(pair, 0, PACKED);
+      const angle = angleBetween(pair, pair, 0, PACKED);
       if (!(angle <= angles[a])) angles[a] = angle;
     }
   }

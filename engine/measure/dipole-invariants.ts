@@ -1,6 +1,6 @@
 import { PI } from '../constants.ts';
-import { atan2, log } from '../math/index.ts';
-import { energyGap, length3, PACKED } from './packed-momenta.ts';
+import { atan2, log, momentum } from '../math/index.ts';
+import { energyGap, PACKED } from './packed-momenta.ts';
 
 /** Offsets of the five packed momenta that describe a branching of a dipole. */
 export const EMITTER = 0;
@@ -77,7 +77,7 @@ const span = new Float64Array(3);
 export function dipoleInvariants(out: DipoleInvariants, p: Float64Array): void {
   for (let n = 0; n < 5; n++) {
     const at = n * PACKED;
-    const length = length3(p, at);
+    const length = momentum(p, at);
     size[n] = length;
     gap[n] = energyGap(p, at, length);
     direction[3 * n] = p[at] / length;

@@ -1,6 +1,6 @@
 import { HBAR_C } from '../constants.ts';
 import { type History, KINDS, ROLES } from '../history/index.ts';
-import { atan2, log } from '../math/index.ts';
+import { angleBetween, atan2, log, momentum } from '../math/index.ts';
 import { fillBirthRows, hardBirthAngles, WIDEST } from './births.ts';
 import {
   DAUGHTER,
@@ -12,7 +12,7 @@ import {
   PARTNER,
   PARTNER_AFTER,
 } from './dipole-invariants.ts';
-import { angleBetween, crossLength, dot3, length3, PACKED, packRow } from './packed-momenta.ts';
+import { crossLength, dot3, PACKED, packRow } from './packed-momenta.ts';
 import { StepMeasures } from './step-measures.ts';
 
 const EMISSION_ROLE = ROLES.indexOf('emission');
@@ -63,7 +63,7 @@ export function measureSteps(history: History, out?: StepMeasures): StepMeasures
     measurePair(measures, step);
     nameSofter(measures, step, history);
     const birth = birthAngle(measures, step, history, hardAngles);
-    measureCoherence(measures, step, birth, angleBetween(packed, EMITTER, PARTNER));
+    measureCoherence(measures, step, birth, angleBetween(packed, packed, EMITTER, PARTNER));
     measureRecoil(measures, step, history);
   }
   return measures;
@@ -81,7 +81,7 @@ function evolution(d: DipoleInvariants, meaning: string | null): number {
 function measurePair(m: StepMeasures, step: number): void {
   const cross = crossLength(packed, DAUGHTER, EMISSION);
   const dot = dot3(packed, DAUGHTER, EMISSION);
-  const lengths = length3(packed, DAUGHTER) * length3(packed, EMISSION);
+  const lengths = momentum(packed, DAUGHTER) * momentum(packed, EMISSION);
   const energyI = packed[DAUGHTER + 3];
   const energyJ = packed[EMISSION + 3];
   const energy = energyI + energyJ;
@@ -149,16 +149,16 @@ function measureCoherence(m: StepMeasures, step: number, birth: number, partner:
 /** Turn, loss and kick of emitter and recoiler, and the four-momentum that the step makes or loses. */
 function measureRecoil(m: StepMeasures, step: number, history: History): void {
   const { steps, entries } = history;
-  m.emitterTurn[step] = angleBetween(packed, EMITTER, DAUGHTER);
+  m.emitterTurn[step] = angleBetween(packed, packed, EMITTER, DAUGHTER);
   m.emitterEnergyLost[step] = 1 - packed[DAUGHTER + 3] / packed[EMITTER + 3];
-  m.emitterKick[step] = crossLength(packed, EMITTER, DAUGHTER) / length3(packed, EMITTER);
+  m.emitterKick[step] = crossLength(packed, EMITTER, DAUGHTER) / momentum(packed, EMITTER);
   const recoiler = steps.recoiler[step];
   const recoilerAfter = steps.recoilerAfter[step];
   packRow(recoil, 0, entries, recoiler);
   packRow(recoil, PACKED, entries, recoilerAfter);
-  m.partnerTurn[step] = angleBetween(recoil, 0, PACKED);
+  m.partnerTurn[step] = angleBetween(recoil, recoil, 0, PACKED);
   m.partnerEnergyLost[step] = 1 - recoil[PACKED + 3] / recoil[3];
-  m.partnerKick[step] = crossLength(recoil, 0, PACKED) / length3(recoil, 0);
+  m.partnerKick[step] = crossLength(recoil, 0, PACKED) / momentum(recoil, 0);
   const alone = recoiler < 0 && recoilerAfter < 0;
   for (let c = 0; c < 4; c++) {
     const taken = alone ? 0 : recoil[PACKED + c] - recoil[c];

@@ -1,5 +1,4 @@
 import type { EntryTable } from '../history/index.ts';
-import { atan2 } from '../math/index.ts';
 
 /** Numbers to a parton in packed momenta: px, py, pz, E, m [GeV]. */
 export const PACKED = 5;
@@ -30,20 +29,6 @@ export function crossLength(p: Float64Array, a: number, b: number): number {
 /** Scalar product of two packed three-momenta [GeV^2]. */
 export function dot3(p: Float64Array, a: number, b: number): number {
   return p[a] * p[b] + p[a + 1] * p[b + 1] + p[a + 2] * p[b + 2];
-}
-
-/** Length of a packed three-momentum [GeV]. */
-export function length3(p: Float64Array, a: number): number {
-  return Math.sqrt(dot3(p, a, a));
-}
-
-/**
- * Angle between two packed three-momenta [rad], 0 to pi.
- *
- * Accuracy: 2e-16 rad absolute at any angle, from the cross product; the arccosine would lose half of the digits.
- */
-export function angleBetween(p: Float64Array, a: number, b: number): number {
-  return atan2(crossLength(p, a, b), dot3(p, a, b));
 }
 
 /**

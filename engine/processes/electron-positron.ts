@@ -1,26 +1,42 @@
 import { PI } from '../constants.ts';
-import { sinCos } from '../math/index.ts';
+import type { Beam } from '../history/index.ts';
 import { type Philox, uniform } from '../random/index.ts';
+import { placeBackToBack } from './back-to-back.ts';
 import { type AngularCoefficients, angularCoefficients } from './electroweak.ts';
+import type { HardProcess } from './hard-process.ts';
 
-const turn = new Float64Array(2);
-
-/** The hard process e+e- -> Z/gamma* -> q qbar: flavour by the electroweak mix, unweighted polar angle. */
-export class ElectronPositron {
-  /** [GeV] */
+/**
+ * The hard process e+e- -> Z/gamma* -> q qbar: flavour by the electroweak mix, unweighted polar angle.
+ *
+ * Flavour and angle follow the massless couplings; a mass enters the momenta and the threshold alone.
+ */
+export class ElectronPositron implements HardProcess {
+  readonly incoming = [11, -11];
+  readonly beams: readonly Beam[];
+  readonly resonance = 23;
+  readonly ring = false;
   readonly sqrtS: number;
-  /** Chosen by the last `generate`: PDG number of the quark. */
-  quark = 0;
-  /** Chosen by the last `generate`: three-momentum of the quark [GeV]; the antiquark's is its opposite. */
-  readonly momentum = new Float64Array(3);
+  readonly outgoing = new Int32Array(2);
+  readonly momenta = new Float64Array(8);
+  readonly masses = new Float64Array(2);
+  weight = 0;
+  maximum = 0;
+  throws = 0;
   private readonly flavours: readonly number[];
+  private readonly flavourMasses: readonly number[];
   private readonly coefficients: readonly AngularCoefficients[];
   private readonly cumulative: readonly number[];
 
-  /** @param flavours PDG numbers of the quarks to choose from, at least one. */
-  constructor(sqrtS: number, flavours: readonly number[]) {
+  /** @param flavours PDG numbers of the quarks to choose from, at least one. @param mass of each [GeV]. */
+  constructor(sqrtS: number, flavours: readonly number[], mass: (flavour: number) => number) {
+    const half = sqrtS / 2;
     this.sqrtS = sqrtS;
+    this.beams = [
+      { id: 11, px: 0, py: 0, pz: half, e: half },
+      { id: -11, px: 0, py: 0, pz: -half, e: half },
+    ];
     this.flavours = flavours;
+    this.flavourMasses = flavours.map(mass);
     this.coefficients = flavours.map((flavour) => angularCoefficients(flavour, sqrtS));
     let sum = 0;
     this.cumulative = this.coefficients.map(({ even }) => {
@@ -29,30 +45,36 @@ export class ElectronPositron {
     });
   }
 
-  /** Throw flavour and direction. */
   generate(random: Philox): void {
     random.block();
     const total = this.cumulative[this.cumulative.length - 1];
     const share = uniform(random.x0) * total;
     let choice = 0;
     while (choice < this.flavours.length - 1 && share > this.cumulative[choice]) choice++;
-    this.quark = this.flavours[choice];
     const azimuth = 2 * PI * uniform(random.x1);
 
     // acceptance-rejection on even (1 + cos^2) + odd cos, whose maximum is at an end
     const { even, odd } = this.coefficients[choice];
     const most = 2 * even + Math.abs(odd);
     let cosine: number;
+    let weight: number;
+    let throws = 0;
     do {
       random.block();
+      throws++;
       cosine = 2 * uniform(random.x0) - 1;
-    } while (uniform(random.x1) * most > even * (1 + cosine * cosine) + odd * cosine);
+      weight = even * (1 + cosine * cosine) + odd * cosine;
+    } while (uniform(random.x1) * most > weight);
+    this.weight = weight;
+    this.maximum = most;
+    this.throws = throws;
 
-    const half = this.sqrtS / 2;
-    const sine = Math.sqrt((1 - cosine) * (1 + cosine));
-    sinCos(turn, azimuth);
-    this.momentum[0] = half * sine * turn[1];
-    this.momentum[1] = half * sine * turn[0];
-    this.momentum[2] = half * cosine;
+    const quark = this.flavours[choice];
+    const mass = this.flavourMasses[choice];
+    this.outgoing[0] = quark;
+    this.outgoing[1] = -quark;
+    this.masses[0] = mass;
+    this.masses[1] = mass;
+    placeBackToBack(this.momenta, this.sqrtS, mass, cosine, azimuth);
   }
 }

@@ -1,5 +1,6 @@
 export { antennaAverage, antennaShare } from './antenna.ts';
 export { kernelGluon, kernelGluonToQuarks, kernelQuark } from './kernels.ts';
+export { quarkMass } from './quark-mass.ts';
 export {
   b0,
   b1,

@@ -8,10 +8,11 @@ import {
   type SampleHead,
 } from '../history/index.ts';
 import { atan2, log } from '../math/index.ts';
-import { ElectronPositron } from '../processes/index.ts';
+import type { HardProcess } from '../processes/index.ts';
 import { Philox, uniform } from '../random/index.ts';
 import { DipoleSampler, G_QQ, type TrialListener } from './dipole-sampler.ts';
 import { DipoleState } from './dipole-state.ts';
+import { makeProcess } from './make-process.ts';
 import { sampleHead } from './sample-head.ts';
 import { type GrowSettings, makeCoupling } from './settings.ts';
 
@@ -23,8 +24,6 @@ const EMISSION = ROLES.indexOf('emission');
 const RECOILED = ROLES.indexOf('recoiled');
 const FINAL_FINAL = KINDS.indexOf('final-final');
 
-const Z_BOSON = 23;
-const ELECTRON = 11;
 const ENTRIES_OF_HARD = 5;
 const ENTRIES_OF_STEP = 3;
 
@@ -46,7 +45,7 @@ export class DipoleShower implements Grower, TrialListener {
   readonly sample: SampleHead;
   private readonly settings: GrowSettings;
   private readonly random = new Philox();
-  private readonly process: ElectronPositron;
+  private readonly process: HardProcess;
   private readonly state = new DipoleState();
   private readonly sampler: DipoleSampler;
   /** The batch that is being written and where its current event begins. */
@@ -56,13 +55,8 @@ export class DipoleShower implements Grower, TrialListener {
 
   constructor(settings: GrowSettings) {
     this.settings = settings;
-    this.sample = sampleHead(settings);
-    const flavours: number[] = [];
-    for (let flavour = 1; flavour <= settings.flavours; flavour++) flavours.push(flavour);
-    this.process = new ElectronPositron(
-      settings.energy,
-      settings.quark === null ? flavours : [settings.quark],
-    );
+    this.process = makeProcess(settings);
+    this.sample = sampleHead(settings, this.process);
     this.sampler = new DipoleSampler(
       settings.order,
       makeCoupling(settings),
@@ -103,7 +97,7 @@ export class DipoleShower implements Grower, TrialListener {
       rerun: null,
       status: 'complete',
       statusReason: null,
-      outgoing: [this.process.quark, -this.process.quark],
+      outgoing: [...this.process.outgoing],
       weight: 1,
     });
     this.batch = null;
@@ -130,23 +124,23 @@ export class DipoleShower implements Grower, TrialListener {
 
   private writeHardProcess(entries: MutableEntries): void {
     const { state, process } = this;
-    const half = process.sqrtS / 2;
     const base = this.entryBase;
-    writeRow(entries, base, ELECTRON, 0, 0, half, half, 0, INCOMING);
-    writeRow(entries, base + 1, -ELECTRON, 0, 0, -half, half, 0, INCOMING);
-    writeRow(entries, base + 2, Z_BOSON, 0, 0, 0, process.sqrtS, process.sqrtS, RESONANCE);
-    const [x, y, z] = process.momentum;
-    // on its shell to the last digit, as every later row
-    const energy = Math.sqrt(x * x + y * y + z * z);
+    let row = 0;
+    for (const { id, px, py, pz, e } of process.beams)
+      if (id !== process.resonance) writeRow(entries, base + row++, id, px, py, pz, e, 0, INCOMING);
+    const resonance = row++;
+    writeRow(entries, base + resonance, process.resonance, 0, 0, 0, process.sqrtS, process.sqrtS, RESONANCE);
     state.clear();
-    const quark = state.addParton(process.quark, x, y, z, energy);
-    const antiquark = state.addParton(-process.quark, -x, -y, -z, energy);
-    state.connect(quark, antiquark);
-    writeParton(entries, base + 3, state, quark, 2, -1, HARD);
-    writeParton(entries, base + 4, state, antiquark, 2, -1, HARD);
-    state.row[quark] = 3;
-    state.row[antiquark] = 4;
-    entries.length = base + ENTRIES_OF_HARD;
+    const { outgoing, masses, momenta } = process;
+    const first = state.addParton(outgoing[0], masses[0], momenta, 0);
+    const second = state.addParton(outgoing[1], masses[1], momenta, 4);
+    state.connect(first, second);
+    if (process.ring) state.connect(second, first);
+    for (let slot = first; slot <= second; slot++) {
+      writeParton(entries, base + row, state, slot, resonance, -1, HARD);
+      state.row[slot] = row++;
+    }
+    entries.length = base + row;
   }
 
   /** Carry out and record the branching that the sampler found. */
@@ -161,7 +155,7 @@ export class DipoleShower implements Grower, TrialListener {
     const generation = state.generation[emitter];
     const sij = y * state.q2[dipole];
     const flavour = channel === G_QQ ? sampler.flavour : 0;
-    const j = state.branch(dipole, fromColourEnd, flavour, z, w, y, azimuth);
+    const j = state.branch(dipole, fromColourEnd, flavour, z, w, y, azimuth, 0);
 
     const base = this.entryBase;
     const row = entries.length - base;
@@ -246,7 +240,7 @@ function writeParton(
   entries.py[at] = state.momenta[momentum + 1];
   entries.pz[at] = state.momenta[momentum + 2];
   entries.e[at] = state.momenta[momentum + 3];
-  entries.m[at] = 0;
+  entries.m[at] = state.mass[slot];
   entries.colour[at] = state.colour[slot];
   entries.anticolour[at] = state.anticolour[slot];
   entries.from[at] = from;

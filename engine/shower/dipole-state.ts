@@ -1,4 +1,10 @@
-import { mapDipole, twiceDot } from '../kinematics/index.ts';
+import {
+  type MassiveBranching,
+  mapDipole,
+  mapMassiveDipole,
+  twiceDot,
+  twiceDotMassive,
+} from '../kinematics/index.ts';
 
 /** First colour tag of an event. Source: Les Houches Accord, hep-ph/0109068. */
 const FIRST_TAG = 501;
@@ -17,6 +23,8 @@ export class DipoleState {
   momenta = new Float64Array(4 * 64);
   /** Slot to PDG number, colour tags, row of the history, generation. A slot is a parton line and gives it its number. */
   id = new Int32Array(64);
+  /** Slot to mass [GeV]. */
+  mass = new Float64Array(64);
   colour = new Int32Array(64);
   anticolour = new Int32Array(64);
   row = new Int32Array(64);
@@ -34,6 +42,16 @@ export class DipoleState {
   /** Dipoles whose q2 the last branching changed. */
   readonly touched = new Int32Array(4);
   touchedCount = 0;
+  private readonly massive: MassiveBranching = {
+    mij2: 0,
+    mk2: 0,
+    mi2: 0,
+    mj2: 0,
+    q2: 0,
+    sij: 0,
+    z: 0,
+    azimuth: 0,
+  };
   private nextTag = FIRST_TAG;
 
   clear(): void {
@@ -42,14 +60,10 @@ export class DipoleState {
     this.nextTag = FIRST_TAG;
   }
 
-  /** A parton of the hard process on a new line, without colour yet. @returns its slot. */
-  addParton(id: number, px: number, py: number, pz: number, e: number): number {
-    const slot = this.newSlot(id, 0);
-    const at = 4 * slot;
-    this.momenta[at] = px;
-    this.momenta[at + 1] = py;
-    this.momenta[at + 2] = pz;
-    this.momenta[at + 3] = e;
+  /** A parton of the hard process, without colour yet. @param momenta px, py, pz, E at offset `at`. @returns its slot. */
+  addParton(id: number, mass: number, momenta: Float64Array, at: number): number {
+    const slot = this.newSlot(id, 0, mass);
+    for (let c = 0; c < 4; c++) this.momenta[4 * slot + c] = momenta[at + c];
     return slot;
   }
 
@@ -58,7 +72,7 @@ export class DipoleState {
     const tag = this.nextTag++;
     this.colour[colourEnd] = tag;
     this.anticolour[anticolourEnd] = tag;
-    return this.newDipole(colourEnd, anticolourEnd, twiceDot(this.momenta, 4 * colourEnd, 4 * anticolourEnd));
+    return this.newDipole(colourEnd, anticolourEnd, this.measureQ2(colourEnd, anticolourEnd));
   }
 
   /**
@@ -66,7 +80,7 @@ export class DipoleState {
    *
    * @param fromColourEnd whether the emitter is the dipole's colour end.
    * @param flavour 0: a gluon is emitted; else the emitter, a gluon, splits into this quark (i) and antiquark (j).
-   * @param w 1 - z.
+   * @param w 1 - z. @param quarkMass of the quarks that a gluon splits into [GeV], 0 for an emitted gluon.
    * @returns the slot of j. `after` holds the momenta, `touched` the dipoles that changed.
    */
   branch(
@@ -77,12 +91,17 @@ export class DipoleState {
     w: number,
     y: number,
     azimuth: number,
+    quarkMass: number,
   ): number {
     const emitter = fromColourEnd ? this.colourEnd[dipole] : this.anticolourEnd[dipole];
     const partner = fromColourEnd ? this.anticolourEnd[dipole] : this.colourEnd[dipole];
-    const q2 = this.q2[dipole];
-    mapDipole(this.after, this.momenta, 4 * emitter, 4 * partner, q2, z, w, y, azimuth);
-    const j = this.newSlot(flavour === 0 ? 21 : -flavour, this.generation[emitter] + 1);
+    const massive = this.mass[emitter] > 0 || this.mass[partner] > 0 || quarkMass > 0;
+    // 2 (pi.pj + pi.pk + pj.pk): what y and z are shares of
+    const q2 = this.q2[dipole] - (flavour === 0 ? 0 : 2 * quarkMass * quarkMass);
+    if (massive) this.mapMassive(emitter, partner, this.q2[dipole], y * q2, quarkMass, z, azimuth);
+    else mapDipole(this.after, this.momenta, 4 * emitter, 4 * partner, q2, z, w, y, azimuth);
+    const j = this.newSlot(flavour === 0 ? 21 : -flavour, this.generation[emitter] + 1, quarkMass);
+    if (flavour !== 0) this.mass[emitter] = quarkMass;
     this.placeMomenta(emitter, j, partner);
     this.touchedCount = 0;
     // the emitter's and the partner's other dipole, which this branching stretches
@@ -90,16 +109,46 @@ export class DipoleState {
     const partnerOther = fromColourEnd ? this.colourDipole[partner] : this.anticolourDipole[partner];
     if (flavour === 0) this.insertGluon(dipole, fromColourEnd, emitter, j, q2, w, y);
     else this.splitGluon(dipole, fromColourEnd, emitter, j, flavour, q2, z, w, y);
-    if (partnerOther >= 0 && partnerOther !== emitterOther)
-      this.setQ2(partnerOther, this.q2[partnerOther] * (1 - y));
-    if (emitterOther >= 0) {
-      const { colourEnd, anticolourEnd } = this;
-      this.setQ2(
-        emitterOther,
-        twiceDot(this.momenta, 4 * colourEnd[emitterOther], 4 * anticolourEnd[emitterOther]),
-      );
+    if (partnerOther >= 0 && partnerOther !== emitterOther) {
+      // a massless partner keeps its direction and loses the fraction y
+      if (massive) this.remeasure(partnerOther);
+      else this.setQ2(partnerOther, this.q2[partnerOther] * (1 - y));
     }
+    if (emitterOther >= 0) this.remeasure(emitterOther);
     return j;
+  }
+
+  private mapMassive(
+    emitter: number,
+    partner: number,
+    q2: number,
+    twicePiPj: number,
+    quarkMass: number,
+    z: number,
+    azimuth: number,
+  ): void {
+    const { massive } = this;
+    massive.mij2 = this.mass[emitter] * this.mass[emitter];
+    massive.mk2 = this.mass[partner] * this.mass[partner];
+    massive.mi2 = quarkMass > 0 ? quarkMass * quarkMass : massive.mij2;
+    massive.mj2 = quarkMass * quarkMass;
+    massive.q2 = q2;
+    massive.sij = twicePiPj + massive.mi2 + massive.mj2;
+    massive.z = z;
+    massive.azimuth = azimuth;
+    if (!mapMassiveDipole(this.after, this.momenta, 4 * emitter, 4 * partner, massive))
+      throw new RangeError(`branching at z ${z}, s_ij ${massive.sij} GeV^2: outside its phase space`);
+  }
+
+  private measureQ2(a: number, b: number): number {
+    const ma = this.mass[a];
+    const mb = this.mass[b];
+    if (ma === 0 && mb === 0) return twiceDot(this.momenta, 4 * a, 4 * b);
+    return twiceDotMassive(this.momenta, 4 * a, 4 * b, ma * ma, mb * mb);
+  }
+
+  private remeasure(dipole: number): void {
+    this.setQ2(dipole, this.measureQ2(this.colourEnd[dipole], this.anticolourEnd[dipole]));
   }
 
   /** The new gluon sits between emitter and partner: it takes over the dipole, and a new one joins it to the emitter. */
@@ -173,10 +222,11 @@ export class DipoleState {
     }
   }
 
-  private newSlot(id: number, generation: number): number {
+  private newSlot(id: number, generation: number, mass: number): number {
     const slot = this.partons++;
     if (slot === this.id.length) this.growSlots();
     this.id[slot] = id;
+    this.mass[slot] = mass;
     this.colour[slot] = 0;
     this.anticolour[slot] = 0;
     this.colourDipole[slot] = -1;
@@ -199,6 +249,7 @@ export class DipoleState {
   private growSlots(): void {
     this.momenta = widen(this.momenta);
     this.id = widen(this.id);
+    this.mass = widen(this.mass);
     this.colour = widen(this.colour);
     this.anticolour = widen(this.anticolour);
     this.row = widen(this.row);

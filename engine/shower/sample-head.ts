@@ -1,20 +1,17 @@
 import { ENTRY_COLUMNS, type SampleHead, STEP_COLUMNS, TRIAL_COLUMNS } from '../history/index.ts';
+import type { HardProcess } from '../processes/index.ts';
 import { VERSION } from '../version.ts';
 import { describeSettings, type GrowSettings } from './settings.ts';
 
 /** What all events of a sample have in common: scales, conventions, settings, columns. */
-export function sampleHead(settings: GrowSettings): SampleHead {
-  const half = settings.energy / 2;
+export function sampleHead(settings: GrowSettings, process: HardProcess): SampleHead {
   const s = settings.energy * settings.energy;
   const cutoff = settings.cutoff * settings.cutoff;
   const virtuality = settings.order === 'virtuality';
   return {
     seed: settings.seed,
-    process: { name: settings.process, incoming: [11, -11] },
-    beams: [
-      { id: 11, px: 0, py: 0, pz: half, e: half },
-      { id: -11, px: 0, py: 0, pz: -half, e: half },
-    ],
+    process: { name: settings.process, incoming: process.incoming },
+    beams: process.beams,
     sqrtS: settings.energy,
     // z(1-z) y Q^2 is at most Q^2/4, y Q^2 at most Q^2; below 4 tc no z resolves kT^2 = z(1-z) t >= tc
     hardScale: virtuality ? s : s / 4,
