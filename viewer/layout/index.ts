@@ -1,3 +1,4 @@
+export { type BallEvent, ballEvent, type Moment, momentOf } from './ball-event.ts';
 export {
   type Camera,
   clampCamera,

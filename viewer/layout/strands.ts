@@ -23,6 +23,8 @@ export interface Strands {
   /** Radii at which the strands begin and end. */
   readonly from: Float64Array;
   readonly to: Float64Array;
+  /** Radius at which the parton is no more: `to`, or Infinity where it survives to the end. */
+  readonly until: Float64Array;
   /** Turns of strand s: `turnStart[s]` up to `turnStart[s + 1]`, at least one; a turn holds until the next begins. */
   readonly turnStart: Int32Array;
   readonly turns: Turns;
@@ -58,6 +60,7 @@ export function layStrands(history: History): Strands {
   const count = grouped.rows.length;
   const from = new Float64Array(count);
   const to = new Float64Array(count);
+  const until = new Float64Array(count);
   const turns: number[][] = [];
   const turnStart = new Int32Array(count + 1);
   const start = new Float64Array(3);
@@ -66,7 +69,9 @@ export function layStrands(history: History): Strands {
     const first = rows[0];
     const parent = history.entries.from[first];
     from[strand] = spans.from[first];
-    to[strand] = spans.to[rows[rows.length - 1]];
+    const last = rows[rows.length - 1];
+    to[strand] = spans.to[last];
+    until[strand] = history.entries.endedBy[last] < 0 ? Infinity : to[strand];
     const born = parent >= 0 && grouped.ofRow[parent] >= 0 ? parent : first;
     start.set(directions.subarray(3 * born, 3 * born + 3));
     turns.push(...layTurns(start, rows, directions, spans.from, to[strand]));
@@ -80,6 +85,7 @@ export function layStrands(history: History): Strands {
     rowTo: spans.to,
     from,
     to,
+    until,
     turnStart,
     turns: packTurns(turns),
     stepTime,

@@ -40,7 +40,12 @@ export interface Circle {
   readonly radius: number;
   readonly stroke?: Stroke;
   readonly fill?: Fill;
+  /** Tint towards which the fill changes at the lower right limb, as on a ball that is lit from the upper left. */
+  readonly limb?: string;
 }
+
+/** Where the light of a shaded circle stands, and from where on it changes, in units of its radius. */
+export const LIMB = { x: -0.2, y: -0.25, radius: 1.32, from: 0.62 } as const;
 
 /** Round dots of one size: `points` x, y, x, y …. */
 export interface Dots {

@@ -1,1 +1,66 @@
-export { type Palette, palette } from './palette.ts';
+export {
+  angleText,
+  arrowRadii,
+  type BallView,
+  ballDrawing,
+  ballMarks,
+  CHAIN,
+  endsOf,
+  type KeyFold,
+  keyPitch,
+  type LabelOptions,
+  type Lettering,
+  letter,
+  letterClock,
+  letterSize,
+  momentText,
+  netLines,
+  type Plate,
+  plateOf,
+  projectSteps,
+  RING,
+  RING_DASH,
+  RING_PIECES,
+  rayStart,
+  ringRadius,
+  rowAt,
+  SAME_RADIUS,
+  SHELL_GAP,
+  turnPath,
+  washShares,
+} from './ball/index.ts';
+export type {
+  ArcText,
+  Circle,
+  Dots,
+  Drawing,
+  Fill,
+  Group,
+  Halo,
+  Mark,
+  Polyline,
+  Region,
+  Stroke,
+  Text,
+} from './display-list.ts';
+export { FACES, type Face, type FaceSpec, plain, type Run, runs, SCRIPT, textOf } from './lettering.ts';
+export { litEdgeOf, luminous, type Palette, palette } from './palette.ts';
+export {
+  ANTIQUARK_DASH,
+  arrowhead,
+  depthFade,
+  depthWidth,
+  FUTURE,
+  GLUON_LEAST,
+  gluonRail,
+  LIT_EDGE,
+  lineWidth,
+  type PartonStyle,
+  styleOf,
+  TICK,
+  tickReach,
+  tintOf,
+} from './parton-style.ts';
+export { type SvgOptions, svgDocument, svgMarks } from './svg.ts';
+export { widthOf } from './text-width.ts';
+export { channels, mix } from './tint.ts';

@@ -1,3 +1,5 @@
+import { channels, mix } from './tint.ts';
+
 /** Tints of a theme as #RRGGBB; see DEVELOPERS.md for what each may be used for. */
 export interface Palette {
   readonly ground: string;
@@ -66,3 +68,10 @@ export const palette = {
   dark,
   print: { ...light, ground: '#FFFFFF', lit: '#FFFFFF', shade: '#FAF8F3' },
 } as const satisfies Record<string, Palette>;
+
+/** Tint towards which the lit disc darkens at its lower right limb: the ball's own shading, and the only gradient. */
+export const litEdgeOf = (of: Palette): string =>
+  luminous(of) ? mix(of.lit, of.rule, 0.42) : mix(of.lit, of.ground, 0.8);
+
+/** Whether a palette is dark ink on light paper. */
+export const luminous = (of: Palette): boolean => channels(of.lit)[0] > 128;

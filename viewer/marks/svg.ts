@@ -1,14 +1,15 @@
-import type {
-  ArcText,
-  Circle,
-  Dots,
-  Drawing,
-  Fill,
-  Halo,
-  Mark,
-  Region,
-  Stroke,
-  Text,
+import {
+  type ArcText,
+  type Circle,
+  type Dots,
+  type Drawing,
+  type Fill,
+  type Halo,
+  LIMB,
+  type Mark,
+  type Region,
+  type Stroke,
+  type Text,
 } from './display-list.ts';
 import { FACES, type Run, SCRIPT } from './lettering.ts';
 import { arcPath } from './svg-path.ts';
@@ -54,7 +55,7 @@ function svgMark(mark: Mark, state: State): string {
     case 'region':
       return region(mark);
     case 'circle':
-      return circle(mark);
+      return circle(mark, state);
     case 'dots':
       return dots(mark);
     case 'text':
@@ -77,8 +78,15 @@ function region(mark: Region): string {
   return `<path d="${d}" fill-rule="evenodd"${paint(mark.fill, undefined)}/>`;
 }
 
-const circle = (mark: Circle): string =>
-  `<circle cx="${n(mark.x)}" cy="${n(mark.y)}" r="${n(mark.radius)}"${paint(mark.fill, mark.stroke)}/>`;
+function circle(mark: Circle, state: State): string {
+  const { x, y, radius, fill, limb } = mark;
+  const at = `cx="${n(x)}" cy="${n(y)}" r="${n(radius)}"`;
+  if (!fill || !limb) return `<circle ${at}${paint(fill, mark.stroke)}/>`;
+  const id = `${state.prefix}-${state.count++}`;
+  const light = `cx="${n(x + LIMB.x * radius)}" cy="${n(y + LIMB.y * radius)}" r="${n(LIMB.radius * radius)}"`;
+  const stops = `<stop offset="${LIMB.from}" stop-color="${fill.tint}"/><stop offset="1" stop-color="${limb}"/>`;
+  return `<radialGradient id="${id}" gradientUnits="userSpaceOnUse" ${light}>${stops}</radialGradient><circle ${at}${paint({ tint: `url(#${id})` }, mark.stroke)}/>`;
+}
 
 // A dot is a line without length and with round ends: one element for all of them.
 function dots(mark: Dots): string {

@@ -1,0 +1,136 @@
+import { ANTIQUARK_DASH, GLUON_LEAST, RING, RING_DASH } from '../../marks/index.ts';
+import { LINE_STYLES } from '../build/strand-quads.ts';
+import { PAINTING, PLACING, SHARED } from './shared.ts';
+
+const float = (value: number): string => (Number.isInteger(value) ? `${value}.0` : String(value));
+const STYLES = Object.entries(LINE_STYLES)
+  .map(([name, code]) => `const int ${name.toUpperCase()} = ${code};`)
+  .join('\n');
+
+/** Lines of one quad a segment, mitred on the paper, with an edge of paper of their own. */
+export const LINE_VERTEX = /* glsl */ `${SHARED}${PLACING}
+${STYLES}
+in vec3 aPoint;
+in vec3 aBefore;
+in vec3 aAfter;
+in vec2 aLine;
+in float aRadius;
+in float aAlong;
+out float vAcross;
+out float vHalf;
+out float vRadius;
+out float vAlong;
+out float vDepth;
+flat out int vStyle;
+
+float edgeOf(int style) {
+  if (style <= OTHER) return EDGE * uSize;
+  return style == TURN ? 1.2 * EDGE * uSize : 0.0;
+}
+
+void main() {
+  int corner = gl_VertexID & 3;
+  bool first = corner < 2;
+  float side = (corner & 1) == 0 ? 1.0 : -1.0;
+  int style = int(aLine.y + 0.5);
+  float grow = style >= NET ? uShell : 1.0;
+  vec3 seen = uView * aPoint * grow;
+  vec2 here = onPaper(seen);
+  vec2 into = here - onPaper(uView * aBefore * grow);
+  vec2 away = onPaper(uView * aAfter * grow) - here;
+  float intoLength = length(into);
+  float awayLength = length(away);
+  into = intoLength > 1e-3 ? into / intoLength : vec2(0.0);
+  away = awayLength > 1e-3 ? away / awayLength : vec2(0.0);
+  if (intoLength <= 1e-3) into = away;
+  if (awayLength <= 1e-3) away = into;
+  vec2 own = first ? away : into;
+  if (dot(own, own) < 0.5) own = vec2(1.0, 0.0);
+  vec2 normal = vec2(-own.y, own.x);
+  float half_ = 0.5 * max(aLine.x * uSize * (style <= OTHER ? depthWidth(seen.z) : 1.0), style == GLUON ? ${float(GLUON_LEAST)} : 0.0);
+  float reach = half_ + edgeOf(style) + 1.0;
+  vec2 sum = into + away;
+  vec2 offset = normal;
+  // A mitre up to twice the width; sharper corners are covered by letting both segments run on a little.
+  if (length(sum) > 1.0) {
+    vec2 mitre = normalize(vec2(-sum.y, sum.x));
+    offset = mitre / dot(mitre, normal);
+  } else {
+    here += own * (first ? -0.6 : 0.6) * half_;
+  }
+  vAcross = side * reach;
+  vHalf = half_;
+  vRadius = aRadius;
+  vAlong = aAlong;
+  vDepth = seen.z;
+  vStyle = style;
+  gl_Position = inClip(here + offset * side * reach, seen.z);
+}
+`;
+
+const [dash, gap] = ANTIQUARK_DASH;
+const [partnerDash, partnerGap] = RING_DASH.partner;
+const [birthDash, birthGap, birthDot, birthGap2] = RING_DASH.birth;
+
+export const LINE_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}
+${STYLES}
+uniform vec3 uRule;
+in float vAcross;
+in float vHalf;
+in float vRadius;
+in float vAlong;
+in float vDepth;
+flat in int vStyle;
+
+float edgeOf(int style) {
+  if (style <= OTHER) return EDGE * uSize;
+  return style == TURN ? 1.2 * EDGE * uSize : 0.0;
+}
+// Part of a dash from "begin" on, in a pattern of period "period".
+float dashed(float begin, float dash, float period) {
+  float at = mod(vAlong - begin, period);
+  return inside(abs(at - 0.5 * dash) - 0.5 * dash);
+}
+
+void main() {
+  bool happened = vStyle > OTHER || vRadius <= uShell + SAME;
+  vec3 paper = paperAt(placeOnPaper());
+  float across = abs(vAcross);
+  float half_ = vHalf;
+  if (!happened) half_ = max(half_ * FUTURE_WIDTH, vStyle == GLUON ? ${float(GLUON_LEAST / 2)} : 0.45);
+  float border = inside(across - half_);
+  float drawn = border;
+  float fade = happened ? depthFade(vDepth) : FUTURE_FADE;
+  vec3 tint = uInk;
+  if (vStyle <= OTHER) tint = uTints[vStyle];
+  if (vStyle == ANTIQUARK) {
+    drawn *= dashed(0.0, ${float(dash)} * uSize, ${float(dash + gap)} * uSize);
+  } else if (vStyle == GLUON) {
+    drawn *= 1.0 - inside(across - max(half_ - max(0.95, 0.5 * half_), 0.45));
+  } else if (vStyle >= OPENING) {
+    fade = vDepth < 0.0 && vStyle <= BIRTH ? ${float(RING.behindFade)} : 0.0;
+    if (vStyle == PARTNER) drawn *= dashed(0.0, ${float(partnerDash)} * uSize, ${float(partnerDash + partnerGap)} * uSize);
+    if (vStyle == BIRTH) {
+      float period = ${float(birthDash + birthGap + birthDot + birthGap2)} * uSize;
+      float dot_ = dashed(${float(birthDash + birthGap)} * uSize, ${float(birthDot)} * uSize, period);
+      drawn *= max(dashed(0.0, ${float(birthDash)} * uSize, period), dot_);
+    }
+    if (vStyle == SILHOUETTE) {
+      fade = 0.45;
+      drawn *= dashed(0.0, 6.0 * uSize, 10.0 * uSize);
+    }
+    if (vStyle == NET) {
+      if (vDepth < 0.0) discard;
+      tint = uRule;
+      fade = 0.2;
+    }
+  }
+  float edge = edgeOf(vStyle);
+  float shown = edge > 0.0 ? inside(across - half_ - edge) : drawn;
+  if (shown < 0.004) discard;
+  colour = vec4(edge > 0.0 ? mix(paper, mix(tint, paper, fade), drawn) : mix(tint, paper, fade), shown);
+  // The edge of paper lies a little deeper than its line, so that it cuts what is behind and not its own continuation.
+  float order = happened ? happenedOrder(vDepth) : futureOrder(vDepth);
+  gl_FragDepth = order + (border < 0.5 ? (happened ? 0.01 : 0.002) : 0.0);
+}
+`;
