@@ -42,6 +42,8 @@ const turns: Record<string, Draw> = {
   'up to a million': (s) => s.sign() * s.scale(1, 20),
   'any double': (s) => s.double(),
   'close to multiples of pi/64': (s) => (Math.floor(s.uniform(-2000, 2000)) * Math.PI) / 64,
+  'not quite so close to multiples of pi/64': (s) =>
+    (Math.floor(s.uniform(-2e6, 2e6)) * Math.PI) / 64 + s.sign() * s.scale(-29, -12),
   'close to large multiples of pi/2': (s) => (Math.floor(s.scale(10, 45)) * Math.PI) / 2,
 };
 const arcs: Record<string, Draw> = {
