@@ -60,7 +60,14 @@ export function importsOf(path: string, text: string): Import[] {
   return found;
 }
 
-/** The imports of every code file. */
+const known = new WeakMap<SourceSet, Import[]>();
+
+/** The imports of every code file, read once for each set of files: three rules ask for them. */
 export function allImports(files: SourceSet): Import[] {
-  return [...files].flatMap(([path, text]) => (isCode(path) ? importsOf(path, text) : []));
+  let found = known.get(files);
+  if (found === undefined) {
+    found = [...files].flatMap(([path, text]) => (isCode(path) ? importsOf(path, text) : []));
+    known.set(files, found);
+  }
+  return found;
 }
