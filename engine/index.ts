@@ -80,6 +80,7 @@ export {
   type SymbolPiece,
   type Thrust,
   thrust,
+  worstCoherence,
 } from './measure/index.ts';
 export { type AngularCoefficients, angularCoefficients } from './processes/index.ts';
 export {

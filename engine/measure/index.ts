@@ -21,3 +21,4 @@ export {
   StepMeasures,
 } from './step-measures.ts';
 export { type Thrust, thrust } from './thrust.ts';
+export { worstCoherence } from './worst-coherence.ts';

@@ -54,7 +54,7 @@ function inverseCoupling(segment: Segment, lnMu2: number): number {
   const c = segment.c;
   if (c === 0) return target;
   // Newton on a convex, rising function from above: quadratic and monotonic
-  let x = target + c * log(1 + (Math.max(target, 0)) / c) + c;
+  let x = target + c * log(1 + Math.max(target, 0) / c) + c;
   for (let turn = 0; turn < 60; turn++) {
     const change = ((implicit(x, c) - target) * (x + c)) / x;
     x -= change;

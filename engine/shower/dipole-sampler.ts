@@ -1,9 +1,16 @@
 import { CA, CF, PI, TR } from '../constants.ts';
 import { exp, log } from '../math/index.ts';
-import type { RunningCoupling } from '../qcd/index.ts';
+import {
+  type FirstEmissionRatio,
+  MassivePoint,
+  quarkMass,
+  type RunningCoupling,
+  softGluonK,
+} from '../qcd/index.ts';
 import { type Philox, uniform } from '../random/index.ts';
 import type { DipoleState } from './dipole-state.ts';
 import { EvolutionWindows } from './evolution-windows.ts';
+import type { GrowSettings } from './settings.ts';
 
 const GLUON = 21;
 
@@ -17,6 +24,10 @@ const PHASE_SPACE = 0;
 const COUPLING = 1;
 const KERNEL = 2;
 const CUTOFF = 3;
+const MATRIX_ELEMENT = 4;
+
+/** Headroom of the overestimate of g -> Q Qbar beside a heavy partner with published velocity factors, which have no limit. */
+const PUBLISHED_HEADROOM = 4;
 
 /** Told of every rejected trial when trials are recorded. */
 export interface TrialListener {
@@ -49,8 +60,9 @@ export class DipoleSampler {
   dipole = 0;
   fromColourEnd = false;
   channel = Q_QG;
-  /** PDG number of the quark in G_QQ. */
+  /** PDG number and mass [GeV] of the quark in G_QQ. */
   flavour = 0;
+  quarkMass = 0;
   rejected = 0;
 
   private readonly virtuality: boolean;
@@ -60,31 +72,50 @@ export class DipoleSampler {
   private readonly cutoff: number;
   private readonly alphaSCutoff: number;
   private readonly windows: EvolutionWindows;
+  private readonly masses: boolean;
+  private readonly point: MassivePoint;
+  private readonly publishedFactors: boolean;
+  /** K/(2 pi) of the physical scheme by number of flavours minus three, null where it is off. */
+  private readonly rescaling: readonly number[] | null;
   private window = 0;
-  /** Dipole to ln Q^2, 1/Q^2, and the weights of both ends: that of the soft shape, and that which is flat in z. */
+  /** Dipole to ln Q^2, 1/Q^2, Q^2/sqrt(lambda) (1 unless both ends are heavy), and the weights of both ends: that of the soft shape, and that which is flat in z. */
   private lnQ2 = new Float64Array(64);
   private perQ2 = new Float64Array(64);
+  private flow = new Float64Array(64);
   private softWeight = new Float64Array(64);
   private flatWeight = new Float64Array(64);
+  /** Dipole to the weight of one flavour of g -> q qbar at one end. */
+  private splitting = new Float64Array(64);
   /** Dipole to the integral of the soft shape over w, and to the weight of both ends, in the present window. */
   private shape = new Float64Array(64);
   private weight = new Float64Array(64);
 
   /** @param cutoff kT^2 resolution [GeV^2]. @param hardScale, @param lowest ends of the evolution [GeV^2]. */
   constructor(
-    order: 'kt' | 'virtuality',
+    settings: GrowSettings,
     coupling: RunningCoupling,
-    flavours: number,
     cutoff: number,
     hardScale: number,
     lowest: number,
   ) {
-    this.virtuality = order === 'virtuality';
+    this.virtuality = settings.order === 'virtuality';
     this.coupling = coupling;
-    this.flavours = flavours;
+    this.flavours = settings.flavours;
+    this.masses = settings.masses;
+    this.publishedFactors = settings.velocityFactors === 'published';
+    this.point = new MassivePoint(this.virtuality, settings.velocityFactors);
+    this.rescaling = settings.cmw ? [3, 4, 5].map((flavours) => softGluonK(flavours) / (2 * PI)) : null;
     this.cutoff = cutoff;
-    this.alphaSCutoff = coupling.atLog(log(cutoff));
-    this.windows = new EvolutionWindows(hardScale, lowest, coupling);
+    this.windows = new EvolutionWindows(hardScale, lowest, (lnT) => this.softAlphaS(lnT));
+    this.alphaSCutoff = this.softAlphaS(log(cutoff));
+  }
+
+  /** Coupling of the channels with a soft gluon, which is the larger one. */
+  private softAlphaS(lnKT2: number): number {
+    const alphaS = this.coupling.atLog(lnKT2);
+    const { rescaling } = this;
+    if (rescaling === null) return alphaS;
+    return alphaS * (1 + rescaling[this.coupling.flavoursAt(lnKT2) - 3] * alphaS);
   }
 
   /** Begin at ln t, with the dipoles of the state. */
@@ -110,11 +141,18 @@ export class DipoleSampler {
    * One long function: split into its parts it took twice as long, because every double that crosses a call which
    * the compiler does not inline becomes an object.
    *
+   * @param correction of the first emission; null for every later one.
    * @param random at the start of this step's numbers; after an accepted trial it holds an unused block.
    * @returns false where nothing branches any more down to the lowest t.
    */
-  next(state: DipoleState, random: Philox, listener: TrialListener | null): boolean {
-    const { virtuality, windows, coupling, weight, flavours } = this;
+  next(
+    state: DipoleState,
+    random: Philox,
+    listener: TrialListener | null,
+    correction: FirstEmissionRatio | null,
+  ): boolean {
+    const headroom = correction === null ? 1 : correction.largest;
+    const { virtuality, windows, coupling, weight, flavours, rescaling } = this;
     const lastWindow = windows.count - 1;
     const softCharge = virtuality ? 1 : 0.5;
     let window = this.window;
@@ -136,7 +174,7 @@ export class DipoleSampler {
       // distance in units of the expected number of trials, used up window by window
       let distance = -log(uniform(wordDistance));
       for (;;) {
-        const rate = (largestAlphaS / (2 * PI)) * total;
+        const rate = ((headroom * largestAlphaS) / (2 * PI)) * total;
         const next = lnT - distance / rate;
         if (next > lnLow) {
           lnT = next;
@@ -166,13 +204,20 @@ export class DipoleSampler {
       // rounding may lead past the end, onto a dipole that cannot branch
       while (weight[dipole] === 0 && dipole > 0) dipole--;
       const shape = this.shape[dipole];
-      const glueWeight = CA * softCharge * shape;
+      const softIntegral = softCharge * this.flow[dipole] * shape;
+      const glueWeight = CA * softIntegral;
       const colourGluon = state.id[state.colourEnd[dipole]] === GLUON;
-      const colourWeight = colourGluon ? glueWeight + flavours * (TR / 2) : 2 * CF * softCharge * shape;
+      const splitting = this.splitting[dipole];
+      const colourWeight = colourGluon ? glueWeight + flavours * splitting : 2 * CF * softIntegral;
       const fromColourEnd = share < colourWeight;
       if (!fromColourEnd) share -= colourWeight;
       const gluon = fromColourEnd ? colourGluon : state.id[state.anticolourEnd[dipole]] === GLUON;
       const channel = gluon ? (share < glueWeight || flavours === 0 ? G_GG : G_QQ) : Q_QG;
+
+      if (channel === G_QQ) {
+        const flavour = 1 + Math.floor((share - glueWeight) / splitting);
+        this.flavour = Math.min(flavour, flavours);
+      }
 
       // w, y and the kernel over its overestimate
       const perQ2 = this.perQ2[dipole];
@@ -199,21 +244,42 @@ export class DipoleSampler {
       const z = 1 - w;
       let reason = -1;
       let ratio = NaN;
-      if (!(z > 0 && w > 0 && y < 1)) reason = PHASE_SPACE;
-      else if (kT2 < this.cutoff) reason = CUTOFF;
-      else {
+      let kernel = NaN;
+      if (!(z > 0 && w > 0)) reason = PHASE_SPACE;
+      else if (this.masses && this.setMasses(state, dipole, fromColourEnd, channel)) {
+        const { point } = this;
+        if (!point.find(channel, t, z, w)) reason = PHASE_SPACE;
+        else {
+          y = point.y;
+          kT2 = point.kT2;
+          // the weight of the dipole holds Q^2/sqrt(lambda) of its ends
+          kernel = point.rate / (channel === Q_QG ? 2 * CF * soft : channel === G_GG ? CA * soft : splitting);
+          kernel /= this.flow[dipole];
+        }
+      } else if (y < 1) {
         // 1 - z(1-y) = w + z y without cancellation
         const pole = 1 / (w + z * y);
-        let kernel = 1 - y;
+        kernel = 1 - y;
         if (channel === Q_QG) kernel *= (2 * pole - (1 + z)) / (2 * soft);
         else if (channel === G_GG) kernel *= (pole - 1 + 0.5 * z * w) / soft;
         else kernel *= 1 - 2 * z * w;
-        const alphaS = coupling.atLog(virtuality ? log(kT2) : lnT);
-        const slower = alphaS / largestAlphaS;
-        ratio = slower * kernel;
-        const u = uniform(wordDecision);
-        if (u < ratio) this.alphaS = alphaS;
-        else reason = u >= slower ? COUPLING : KERNEL;
+      } else reason = PHASE_SPACE;
+      if (reason < 0) {
+        if (kT2 < this.cutoff) reason = CUTOFF;
+        else {
+          const lnKT2 = virtuality ? log(kT2) : lnT;
+          const alphaS =
+            rescaling === null || channel === G_QQ ? coupling.atLog(lnKT2) : this.softAlphaS(lnKT2);
+          const slower = alphaS / largestAlphaS;
+          const u = uniform(wordDecision);
+          ratio = (slower * kernel) / headroom;
+          const before = ratio;
+          if (correction !== null)
+            ratio *= channel === G_QQ ? correction.splitting(z, y) : correction.emission(z, y);
+          if (u < ratio) this.alphaS = alphaS;
+          else if (u >= slower) reason = COUPLING;
+          else reason = u * headroom >= slower * kernel || before <= ratio ? KERNEL : MATRIX_ELEMENT;
+        }
       }
 
       if (reason < 0 || listener !== null) {
@@ -230,10 +296,6 @@ export class DipoleSampler {
       }
       if (reason < 0) {
         this.rejected = rejected;
-        if (channel === G_QQ) {
-          const flavour = 1 + Math.floor((share - glueWeight) / (TR / 2));
-          this.flavour = Math.min(flavour, flavours);
-        }
         return true;
       }
       rejected++;
@@ -254,8 +316,13 @@ export class DipoleSampler {
     const gluons =
       (state.id[state.colourEnd[dipole]] === GLUON ? 1 : 0) +
       (state.id[state.anticolourEnd[dipole]] === GLUON ? 1 : 0);
-    this.softWeight[dipole] = (this.virtuality ? 1 : 0.5) * (gluons * CA + (2 - gluons) * 2 * CF);
-    this.flatWeight[dipole] = gluons * this.flavours * (TR / 2);
+    const flow = this.masses ? relativeFlow(state, dipole) : 1;
+    this.flow[dipole] = flow;
+    this.softWeight[dipole] = flow * (this.virtuality ? 1 : 0.5) * (gluons * CA + (2 - gluons) * 2 * CF);
+    const { colourEnd, anticolourEnd } = state;
+    const heavy = state.mass[colourEnd[dipole]] > 0 || state.mass[anticolourEnd[dipole]] > 0;
+    this.splitting[dipole] = (TR / 2) * (heavy && this.publishedFactors ? PUBLISHED_HEADROOM : 1);
+    this.flatWeight[dipole] = gluons * this.flavours * this.splitting[dipole];
   }
 
   private weighAll(state: DipoleState): void {
@@ -288,8 +355,10 @@ export class DipoleSampler {
     };
     this.lnQ2 = widen(this.lnQ2);
     this.perQ2 = widen(this.perQ2);
+    this.flow = widen(this.flow);
     this.softWeight = widen(this.softWeight);
     this.flatWeight = widen(this.flatWeight);
+    this.splitting = widen(this.splitting);
     this.shape = widen(this.shape);
     this.weight = widen(this.weight);
   }
@@ -301,4 +370,32 @@ export class DipoleSampler {
     for (let dipole = 0; dipole < count; dipole++) sum += weight[dipole];
     return sum;
   }
+
+  /** Tell the point of massive phase space about a dipole end. @returns whether any mass enters. */
+  private setMasses(state: DipoleState, dipole: number, fromColourEnd: boolean, channel: number): boolean {
+    const emitter = fromColourEnd ? state.colourEnd[dipole] : state.anticolourEnd[dipole];
+    const partner = fromColourEnd ? state.anticolourEnd[dipole] : state.colourEnd[dipole];
+    const quark = channel === G_QQ ? quarkMass(this.flavour) : 0;
+    this.quarkMass = quark;
+    const mij = state.mass[emitter];
+    const mk = state.mass[partner];
+    if (mij === 0 && mk === 0 && quark === 0) return false;
+    const { point } = this;
+    point.q2 = state.q2[dipole];
+    point.mij2 = mij * mij;
+    point.mk2 = mk * mk;
+    point.mi2 = channel === G_QQ ? quark * quark : mij * mij;
+    point.mj2 = quark * quark;
+    return true;
+  }
+}
+
+/** 2 p.q / sqrt(lambda) of a dipole: the inverse of the relative velocity of its ends. */
+function relativeFlow(state: DipoleState, dipole: number): number {
+  const a = state.mass[state.colourEnd[dipole]];
+  const b = state.mass[state.anticolourEnd[dipole]];
+  if (a === 0 || b === 0) return 1;
+  const q2 = state.q2[dipole];
+  const both = (2 * a * b) / q2;
+  return 1 / Math.sqrt((1 - both) * (1 + both));
 }

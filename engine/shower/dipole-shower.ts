@@ -9,10 +9,11 @@ import {
 } from '../history/index.ts';
 import { atan2, log } from '../math/index.ts';
 import type { HardProcess } from '../processes/index.ts';
+import type { FirstEmissionRatio } from '../qcd/index.ts';
 import { Philox, uniform } from '../random/index.ts';
 import { DipoleSampler, G_QQ, type TrialListener } from './dipole-sampler.ts';
 import { DipoleState } from './dipole-state.ts';
-import { makeProcess } from './make-process.ts';
+import { makeFirstEmission, makeProcess } from './make-process.ts';
 import { sampleHead } from './sample-head.ts';
 import { type GrowSettings, makeCoupling } from './settings.ts';
 
@@ -46,6 +47,7 @@ export class DipoleShower implements Grower, TrialListener {
   private readonly settings: GrowSettings;
   private readonly random = new Philox();
   private readonly process: HardProcess;
+  private readonly firstEmission: FirstEmissionRatio | null;
   private readonly state = new DipoleState();
   private readonly sampler: DipoleSampler;
   /** The batch that is being written and where its current event begins. */
@@ -56,11 +58,11 @@ export class DipoleShower implements Grower, TrialListener {
   constructor(settings: GrowSettings) {
     this.settings = settings;
     this.process = makeProcess(settings);
+    this.firstEmission = makeFirstEmission(settings);
     this.sample = sampleHead(settings, this.process);
     this.sampler = new DipoleSampler(
-      settings.order,
+      settings,
       makeCoupling(settings),
-      settings.flavours,
       this.sample.cutoff,
       this.sample.hardScale,
       this.sample.tLow,
@@ -82,7 +84,7 @@ export class DipoleShower implements Grower, TrialListener {
     let tStart = this.sample.hardScale;
     for (let step = 0; ; step++) {
       random.startStep(step + 1);
-      if (!sampler.next(state, random, listener)) break;
+      if (!sampler.next(state, random, listener, step === 0 ? this.firstEmission : null)) break;
       batch.reserve(ENTRIES_OF_STEP, 1, 0);
       this.takeStep(batch.entries, batch.steps, step, tStart);
       tStart = sampler.t;
@@ -153,9 +155,10 @@ export class DipoleShower implements Grower, TrialListener {
     const emitterRow = state.row[emitter];
     const partnerRow = state.row[partner];
     const generation = state.generation[emitter];
-    const sij = y * state.q2[dipole];
     const flavour = channel === G_QQ ? sampler.flavour : 0;
-    const j = state.branch(dipole, fromColourEnd, flavour, z, w, y, azimuth, 0);
+    const quarkMass = flavour === 0 ? 0 : sampler.quarkMass;
+    const twicePiPj = y * (state.q2[dipole] - 2 * quarkMass * quarkMass);
+    const j = state.branch(dipole, fromColourEnd, flavour, z, w, y, azimuth, quarkMass);
 
     const base = this.entryBase;
     const row = entries.length - base;
@@ -178,9 +181,7 @@ export class DipoleShower implements Grower, TrialListener {
     steps.azimuth[at] = azimuth;
     steps.y[at] = y;
     steps.kT[at] = Math.sqrt(sampler.kT2);
-    // s_ij = 2 Ei Ej (1 - cos theta), with s_ij from the bookkeeping: an angle that the momenta can be held against
-    const room = 4 * state.after[3] * state.after[7] - sij;
-    steps.openingAngle[at] = 2 * atan2(Math.sqrt(sij), Math.sqrt(Math.max(room, 0)));
+    steps.openingAngle[at] = claimedAngle(state, emitter, j, twicePiPj);
     steps.alphaS[at] = sampler.alphaS;
     steps.emitter[at] = emitterRow;
     steps.partner[at] = partnerRow;
@@ -195,6 +196,20 @@ export class DipoleShower implements Grower, TrialListener {
     steps.generation[at] = generation;
     steps.length = at + 1;
   }
+}
+
+/** Opening angle from 2 pi.pj as the shower knows it: an angle that the momenta can be held against. */
+function claimedAngle(state: DipoleState, i: number, j: number, twicePiPj: number): number {
+  const { after } = state;
+  const mi2 = state.mass[i] * state.mass[i];
+  const mj2 = state.mass[j] * state.mass[j];
+  const pi2 = after[3] * after[3] - mi2;
+  const ee = after[3] * after[7];
+  const pp = mi2 === 0 && mj2 === 0 ? ee : Math.sqrt(pi2 * (after[7] * after[7] - mj2));
+  // |pi||pj| (1 - cos) = pi.pj - (Ei Ej - |pi||pj|)
+  const apart = twicePiPj - (2 * (mi2 * after[7] * after[7] + mj2 * pi2)) / (ee + pp);
+  const half = Math.max(apart, 0);
+  return 2 * atan2(Math.sqrt(half), Math.sqrt(Math.max(4 * pp - half, 0)));
 }
 
 /** A row without colour: nine numbers because it runs in the inner loop and an object would be an allocation. */

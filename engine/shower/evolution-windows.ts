@@ -1,5 +1,4 @@
 import { exp, log } from '../math/index.ts';
-import type { RunningCoupling } from '../qcd/index.ts';
 
 const LN_2 = Math.LN2;
 
@@ -17,8 +16,8 @@ export class EvolutionWindows {
   readonly alphaS: Float64Array;
   private readonly lnHardScale: number;
 
-  /** @param hardScale, @param lowest ends of the evolution [GeV^2]. */
-  constructor(hardScale: number, lowest: number, coupling: RunningCoupling) {
+  /** @param hardScale, @param lowest ends of the evolution [GeV^2]. @param alphaS a coupling that falls with ln t. */
+  constructor(hardScale: number, lowest: number, alphaS: (lnT: number) => number) {
     this.lnHardScale = log(hardScale);
     const lnLowest = log(lowest);
     this.count = Math.max(1, Math.ceil((this.lnHardScale - lnLowest) / LN_2));
@@ -29,7 +28,7 @@ export class EvolutionWindows {
       const lnLow = window === this.count - 1 ? lnLowest : this.lnHardScale - (window + 1) * LN_2;
       this.lnLow[window] = lnLow;
       this.low[window] = exp(lnLow);
-      this.alphaS[window] = coupling.atLog(lnLow);
+      this.alphaS[window] = alphaS(lnLow);
     }
   }
 

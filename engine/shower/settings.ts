@@ -1,10 +1,16 @@
 import { ALPHA_S_MZ } from '../constants.ts';
 import type { SettingValue } from '../history/index.ts';
-import { type CouplingChoice, LandauPoleError, RunningCoupling } from '../qcd/index.ts';
+import {
+  type CouplingChoice,
+  LandauPoleError,
+  quarkMass,
+  RunningCoupling,
+  type VelocityFactors,
+} from '../qcd/index.ts';
 
 /** Everything that shapes a sample. Energies in GeV. */
 export interface GrowSettings {
-  readonly process: 'ee';
+  readonly process: 'ee' | 'scalar-gg' | 'scalar-bb';
   /** Centre-of-mass energy [GeV]. */
   readonly energy: number;
   /** Integer, 0 to 2^53 - 1. */
@@ -15,6 +21,7 @@ export interface GrowSettings {
   readonly coupling: CouplingChoice;
   /** alpha_s at the Z mass; unused by a fixed coupling. */
   readonly alphasMz: number;
+  /** Whether soft-gluon channels use the physical scheme's coupling. */
   readonly cmw: boolean;
   /** Resolution in kT [GeV]. */
   readonly cutoff: number;
@@ -22,9 +29,12 @@ export interface GrowSettings {
   readonly flavours: number;
   /** PDG number of the quark of the hard process, null: the electroweak mix. */
   readonly quark: number | null;
+  /** Whether charm and bottom are heavy. */
   readonly masses: boolean;
-  readonly velocityFactors: 'unit';
-  readonly firstEmission: 'kernel';
+  /** Before the collinear parts of massive kernels. */
+  readonly velocityFactors: VelocityFactors;
+  /** Whether the first emission follows the matrix element of the hard process. */
+  readonly firstEmission: 'kernel' | 'matched';
   /** Whether rejected trials are recorded. */
   readonly trials: boolean;
 }
@@ -73,14 +83,24 @@ function demand(holds: boolean, option: string, found: unknown, expected: string
  */
 export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings {
   const all: GrowSettings = { ...DEFAULT_SETTINGS, ...some };
-  demand(all.process === 'ee', 'process', all.process, 'ee');
+  demand(PROCESSES.includes(all.process), 'process', all.process, 'ee, scalar-gg or scalar-bb');
   demand(all.shower === 'dipole', 'shower', all.shower, 'dipole');
   demand(all.order === 'kt' || all.order === 'virtuality', 'order', all.order, 'kt or virtuality');
   demand(all.recoil === 'local', 'recoil', all.recoil, 'local');
-  demand(all.masses === false, 'masses', all.masses ? 'on' : all.masses, 'off');
-  demand(all.velocityFactors === 'unit', 'velocity-factors', all.velocityFactors, 'unit');
-  demand(all.firstEmission === 'kernel', 'first-emission', all.firstEmission, 'kernel');
-  demand(all.cmw === false, 'cmw', all.cmw ? 'on' : all.cmw, 'off');
+  demand(typeof all.masses === 'boolean', 'masses', all.masses, 'on or off');
+  demand(
+    all.velocityFactors === 'unit' || all.velocityFactors === 'published',
+    'velocity-factors',
+    all.velocityFactors,
+    'unit or published',
+  );
+  demand(
+    all.firstEmission === 'kernel' || all.firstEmission === 'matched',
+    'first-emission',
+    all.firstEmission,
+    'matched or kernel',
+  );
+  demand(typeof all.cmw === 'boolean', 'cmw', all.cmw, 'on or off');
   demand(typeof all.trials === 'boolean', 'trials', all.trials, 'true or false');
   demand(
     Number.isSafeInteger(all.seed) && all.seed >= 0,
@@ -108,7 +128,13 @@ export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings 
     'd, u, s, c or b',
   );
   demand(
-    all.flavours > 0 || all.quark !== null,
+    all.quark === null || all.process === 'ee',
+    'quark',
+    all.quark,
+    `no quark: ${all.process} makes its own partons`,
+  );
+  demand(
+    all.flavours > 0 || all.quark !== null || all.process !== 'ee',
     'flavours',
     all.flavours,
     'at least 1 where --quark leaves the hard process to the electroweak mix',
@@ -126,7 +152,45 @@ export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings 
     all.cutoff,
     `less than half of the energy, ${all.energy / 2} GeV: the largest kT of the first branching`,
   );
+  demandThreshold(all);
+  demandMasslessFirstEmission(all);
   return all;
+}
+
+const PROCESSES: readonly string[] = ['ee', 'scalar-gg', 'scalar-bb'];
+
+/** PDG numbers of the partons that the hard process may make. */
+export function hardFlavours(settings: GrowSettings): number[] {
+  if (settings.process === 'scalar-gg') return [21];
+  if (settings.process === 'scalar-bb') return [5];
+  if (settings.quark !== null) return [settings.quark];
+  const open: number[] = [];
+  for (let flavour = 1; flavour <= settings.flavours; flavour++)
+    if (!settings.masses || 2 * quarkMass(flavour) < settings.energy) open.push(flavour);
+  return open;
+}
+
+function demandThreshold(all: GrowSettings): void {
+  const least = Math.min(...hardFlavours(all).map((id) => (all.masses ? 2 * quarkMass(id) : 0)));
+  demand(
+    all.energy > least,
+    'energy',
+    all.energy,
+    `more than ${least} GeV, the threshold of the hard process`,
+  );
+}
+
+/** The matrix elements are those of massless partons. */
+function demandMasslessFirstEmission(all: GrowSettings): void {
+  if (all.firstEmission !== 'matched' || !all.masses) return;
+  const heavy = hardFlavours(all).some((id) => quarkMass(id) > 0);
+  const splitsHeavy = all.process === 'scalar-gg' && all.flavours > 3;
+  demand(
+    !heavy && !splitsHeavy,
+    'first-emission',
+    'matched',
+    'kernel where a heavy quark may take part in the first emission (--masses on): the matrix element is massless',
+  );
 }
 
 function demandCoupling(all: GrowSettings): void {

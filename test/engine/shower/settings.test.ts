@@ -46,7 +46,9 @@ describe('settings', () => {
     expect(refusal({ seed: 1.5 }).option).toBe('seed');
     expect(refusal({ alphasMz: 0 }).option).toBe('alphas-mz');
     expect(refusal({ coupling: { kind: 'fixed', value: 0 } }).option).toBe('coupling');
-    expect(refusal({ masses: true }).message).toBe('--masses on: expected off');
+    expect(refusal({ energy: 9, quark: 5, masses: true }).expected).toMatch(/9\.6 GeV, the threshold/);
+    expect(refusal({ quark: 5, masses: true, firstEmission: 'matched' }).option).toBe('first-emission');
+    expect(refusal({ process: 'scalar-gg', quark: 1 }).option).toBe('quark');
   });
 
   it('at the edges of what makes sense grow events', () => {
