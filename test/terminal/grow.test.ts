@@ -86,6 +86,11 @@ describe('the bytes of a file', () => {
       ['--cutoff', '2'],
       ['--flavours', '4'],
       ['--quark', 'd'],
+      ['--process', 'scalar-gg'],
+      ['--process', 'scalar-bb'],
+      ['--masses', 'on'],
+      ['--first-emission', 'matched'],
+      ['--cmw', 'on'],
       ['--trials'],
     ];
     for (const change of changes) {

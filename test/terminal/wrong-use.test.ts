@@ -50,7 +50,7 @@ describe('a command line that cannot be is refused with 2, naming what exists', 
   );
 
   test.each<[string, string, RegExp]>([
-    ['process', 'drell-yan', /takes ee; found "drell-yan"/],
+    ['process', 'drell-yan', /takes ee \| scalar-gg \| scalar-bb; found "drell-yan"/],
     ['shower', 'coherent', /takes dipole; found "coherent"/],
     ['order', 'angle', /takes kt \| virtuality; found "angle"/],
     ['recoil', 'global', /takes local; found "global"/],
@@ -59,9 +59,9 @@ describe('a command line that cannot be is refused with 2, naming what exists', 
     ['coupling', 'fixed:', /takes fixed:VALUE/],
     ['coupling', 'fixed:big', /takes fixed:VALUE/],
     ['cmw', 'yes', /takes on \| off/],
-    ['masses', 'on', /takes off; found "on"/],
-    ['velocity-factors', 'published', /takes unit/],
-    ['first-emission', 'matched', /takes kernel/],
+    ['masses', 'true', /takes on \| off; found "true"/],
+    ['velocity-factors', 'none', /takes unit \| published/],
+    ['first-emission', 'exact', /takes matched \| kernel/],
     ['quark', 't', /takes d \| u \| s \| c \| b/],
     ['workers', '2', /takes 1; found "2"/],
     ['flavours', '6', /takes an integer, 0 to 5/],
@@ -92,6 +92,11 @@ describe('a command line that cannot be is refused with 2, naming what exists', 
     [['--alphas-mz', '1'], /--alphas-mz 1: expected/],
     [['--coupling', 'fixed:-1'], /--coupling fixed:-1: expected/],
     [['--flavours', '0'], /--flavours 0: expected at least 1/],
+    [
+      ['--process', 'scalar-bb', '--masses', 'on', '--energy', '9'],
+      /--energy 9: expected more than 9\.6 GeV/,
+    ],
+    [['--process', 'scalar-gg', '--quark', 'd'], /--quark 1: expected no quark/],
   ])('settings that make no sense: grow %j', (words, said) =>
     expectRefused(['grow', '--out', 'x.shower', ...words], 'setting', said),
   );

@@ -31,7 +31,10 @@ function readCoupling(text: string): Coupling | undefined {
 const { energy, cutoff, alphasMz, flavours, seed } = DEFAULT_SETTINGS;
 
 const options = {
-  process: oneOf(['ee'], { purpose: 'hard process: e+e- -> gamma*/Z -> q qbar', otherwise: 'ee' }),
+  process: oneOf(['ee', 'scalar-gg', 'scalar-bb'], {
+    purpose: 'hard process: e+e- -> gamma*/Z -> q qbar, or a scalar -> g g or b bbar',
+    otherwise: 'ee',
+  }),
   energy: number('GeV', { purpose: 'centre-of-mass energy', otherwise: energy }),
   events: integer(1, MOST, { purpose: 'number of events', otherwise: 1000 }),
   seed: integer(0, MOST, { purpose: 'event n of a seed is always the same history', otherwise: seed }),
@@ -47,10 +50,16 @@ const options = {
   cmw: oneOf(['on', 'off'], { purpose: 'coupling in the physical scheme of soft gluons', otherwise: 'off' }),
   cutoff: number('GeV', { purpose: 'smallest kT of a branching', otherwise: cutoff }),
   flavours: integer(0, 5, { purpose: 'quark flavours that a gluon splits into', otherwise: flavours }),
-  quark: oneOf(QUARKS, { purpose: 'force the quark of the hard process', otherwise: 'electroweak mix' }),
-  masses: oneOf(['off'], { purpose: 'quark masses', otherwise: 'off' }),
-  'velocity-factors': oneOf(['unit'], { purpose: 'factors of massive kernels', otherwise: 'unit' }),
-  'first-emission': oneOf(['kernel'], { purpose: 'what the first emission follows', otherwise: 'kernel' }),
+  quark: oneOf(QUARKS, { purpose: 'force the quark of ee', otherwise: 'electroweak mix' }),
+  masses: oneOf(['on', 'off'], { purpose: 'heavy charm and bottom', otherwise: 'off' }),
+  'velocity-factors': oneOf(['unit', 'published'], {
+    purpose: 'factors before the collinear parts of massive kernels',
+    otherwise: 'unit',
+  }),
+  'first-emission': oneOf(['matched', 'kernel'], {
+    purpose: 'whether the first emission follows the matrix element of the hard process',
+    otherwise: 'kernel',
+  }),
   trials: flag('record rejected trials as well'),
   workers: custom('1', { purpose: 'number of threads', otherwise: 1 }, (text) =>
     text === '1' ? 1 : undefined,
