@@ -105,6 +105,7 @@ export {
   type Grower,
   type GrowSettings,
   growEvent,
+  RegrowError,
   resolveSettings,
   SettingError,
 } from './shower/index.ts';

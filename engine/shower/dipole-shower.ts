@@ -1,32 +1,28 @@
 import { PI } from '../constants.ts';
 import {
+  type History,
   type HistoryBatch,
-  KINDS,
   type MutableEntries,
-  type MutableSteps,
   ROLES,
   type SampleHead,
 } from '../history/index.ts';
-import { atan2, log } from '../math/index.ts';
+import { log } from '../math/index.ts';
 import type { HardProcess } from '../processes/index.ts';
 import type { FirstEmissionRatio } from '../qcd/index.ts';
 import { Philox, uniform } from '../random/index.ts';
+import { Branching, ENTRIES_OF_STEP, recordStep, writeParton, writeRow } from './dipole-record.ts';
 import { DipoleSampler, G_QQ, type TrialListener } from './dipole-sampler.ts';
 import { DipoleState } from './dipole-state.ts';
 import { makeFirstEmission, makeProcess } from './make-process.ts';
+import { copyTrials, demandRegrowable, demandSameRows, takeHardPartons, takeRecorded } from './resume.ts';
 import { sampleHead } from './sample-head.ts';
 import { type GrowSettings, makeCoupling } from './settings.ts';
 
 const INCOMING = ROLES.indexOf('incoming');
 const RESONANCE = ROLES.indexOf('resonance');
 const HARD = ROLES.indexOf('hard');
-const EMITTER = ROLES.indexOf('emitter');
-const EMISSION = ROLES.indexOf('emission');
-const RECOILED = ROLES.indexOf('recoiled');
-const FINAL_FINAL = KINDS.indexOf('final-final');
 
 const ENTRIES_OF_HARD = 5;
-const ENTRIES_OF_STEP = 3;
 
 /** Grows events of one sample, each from its own random numbers. */
 export interface Grower {
@@ -39,9 +35,19 @@ export interface Grower {
    * @param event its number in the file, `stream` unless given.
    */
   grow(batch: HistoryBatch, stream: number, event?: number): void;
+  /**
+   * Append an event that keeps the steps 0 to `keep` of another, bit for bit, and grows the rest again.
+   *
+   * The steps that follow take the random numbers of this grower's seed and of `stream`: with those of the original,
+   * and its settings, the original comes back.
+   *
+   * @param keep -1: the hard process alone.
+   * @throws RegrowError for a history that these settings cannot continue or this engine did not make.
+   */
+  regrow(batch: HistoryBatch, original: History, keep: number, stream: number, event: number): void;
 }
 
-/** Massless final-final dipole shower with local recoil behind e+e- -> q qbar. Source: see DipoleSampler, mapDipole. */
+/** Final-final dipole shower with local recoil. Source: see DipoleSampler, DipoleState. */
 export class DipoleShower implements Grower, TrialListener {
   readonly sample: SampleHead;
   private readonly settings: GrowSettings;
@@ -50,6 +56,7 @@ export class DipoleShower implements Grower, TrialListener {
   private readonly firstEmission: FirstEmissionRatio | null;
   private readonly state = new DipoleState();
   private readonly sampler: DipoleSampler;
+  private readonly branching = new Branching();
   /** The batch that is being written and where its current event begins. */
   private batch: HistoryBatch | null = null;
   private entryBase = 0;
@@ -70,28 +77,59 @@ export class DipoleShower implements Grower, TrialListener {
   }
 
   grow(batch: HistoryBatch, stream: number, event: number = stream): void {
-    const { random, sampler, state, settings } = this;
+    this.beginEvent(batch, stream);
+    this.process.generate(this.random);
+    this.writeHardProcess(batch.entries);
+    this.evolve(batch, 0, this.sample.hardScale);
+    this.endEvent(batch, event, stream);
+  }
+
+  regrow(batch: HistoryBatch, original: History, keep: number, stream: number, event: number): void {
+    demandRegrowable(this.sample, original, keep);
+    this.beginEvent(batch, stream);
+    takeHardPartons(this.process, original);
+    this.writeHardProcess(batch.entries);
+    const { state, branching, entryBase, stepBase } = this;
+    let tStart = this.sample.hardScale;
+    for (let step = 0; step <= keep; step++) {
+      takeRecorded(branching, state, original, step);
+      batch.reserve(ENTRIES_OF_STEP, 1, 0);
+      recordStep(batch.entries, batch.steps, entryBase, stepBase, state, branching, step, tStart);
+      tStart = branching.t;
+    }
+    if (batch.trials !== null) copyTrials(batch, original, keep);
+    demandSameRows(batch, entryBase, stepBase, original, keep);
+    this.evolve(batch, keep + 1, tStart);
+    this.endEvent(batch, event, stream);
+  }
+
+  private beginEvent(batch: HistoryBatch, stream: number): void {
     this.batch = batch;
     this.entryBase = batch.entries.length;
     this.stepBase = batch.steps.length;
-    random.startEvent(settings.seed, stream);
-    this.process.generate(random);
+    this.random.startEvent(this.settings.seed, stream);
     batch.reserve(ENTRIES_OF_HARD, 0, 0);
-    this.writeHardProcess(batch.entries);
+  }
 
+  /** Branch from `step` on, whose gap begins at tStart, down to the lowest t. */
+  private evolve(batch: HistoryBatch, step: number, tStart: number): void {
+    const { random, sampler, state, branching, entryBase, stepBase } = this;
     const listener = batch.trials === null ? null : this;
-    sampler.start(state, log(this.sample.hardScale));
-    let tStart = this.sample.hardScale;
-    for (let step = 0; ; step++) {
+    sampler.start(state, log(tStart));
+    for (; ; step++) {
       random.startStep(step + 1);
       if (!sampler.next(state, random, listener, step === 0 ? this.firstEmission : null)) break;
+      this.takeFound();
       batch.reserve(ENTRIES_OF_STEP, 1, 0);
-      this.takeStep(batch.entries, batch.steps, step, tStart);
-      tStart = sampler.t;
+      recordStep(batch.entries, batch.steps, entryBase, stepBase, state, branching, step, tStart);
+      tStart = branching.t;
       // the next gap begins at the recorded t, so that a history can be continued from its tables
-      sampler.lnT = log(sampler.t);
+      sampler.lnT = log(tStart);
       sampler.refresh(state);
     }
+  }
+
+  private endEvent(batch: HistoryBatch, event: number, stream: number): void {
     batch.endEvent({
       event,
       label: null,
@@ -145,122 +183,22 @@ export class DipoleShower implements Grower, TrialListener {
     entries.length = base + row;
   }
 
-  /** Carry out and record the branching that the sampler found. */
-  private takeStep(entries: MutableEntries, steps: MutableSteps, step: number, tStart: number): void {
-    const { state, sampler, random } = this;
-    const { dipole, fromColourEnd, channel, z, w, y } = sampler;
-    const azimuth = 2 * PI * uniform(random.x0);
-    const emitter = fromColourEnd ? state.colourEnd[dipole] : state.anticolourEnd[dipole];
-    const partner = fromColourEnd ? state.anticolourEnd[dipole] : state.colourEnd[dipole];
-    const emitterRow = state.row[emitter];
-    const partnerRow = state.row[partner];
-    const generation = state.generation[emitter];
-    const flavour = channel === G_QQ ? sampler.flavour : 0;
-    const quarkMass = flavour === 0 ? 0 : sampler.quarkMass;
-    const twicePiPj = y * (state.q2[dipole] - 2 * quarkMass * quarkMass);
-    const j = state.branch(dipole, fromColourEnd, flavour, z, w, y, azimuth, quarkMass);
-
-    const base = this.entryBase;
-    const row = entries.length - base;
-    writeParton(entries, base + row, state, emitter, emitterRow, step, EMITTER);
-    writeParton(entries, base + row + 1, state, j, emitterRow, step, EMISSION);
-    writeParton(entries, base + row + 2, state, partner, partnerRow, step, RECOILED);
-    entries.endedBy[base + emitterRow] = step;
-    entries.endedBy[base + partnerRow] = step;
-    state.row[emitter] = row;
-    state.row[j] = row + 1;
-    state.row[partner] = row + 2;
-    entries.length = base + row + ENTRIES_OF_STEP;
-
-    const at = this.stepBase + step;
-    steps.kind[at] = FINAL_FINAL;
-    steps.channel[at] = channel;
-    steps.t[at] = sampler.t;
-    steps.tStart[at] = tStart;
-    steps.z[at] = z;
-    steps.azimuth[at] = azimuth;
-    steps.y[at] = y;
-    steps.kT[at] = Math.sqrt(sampler.kT2);
-    steps.openingAngle[at] = claimedAngle(state, emitter, j, twicePiPj);
-    steps.alphaS[at] = sampler.alphaS;
-    steps.emitter[at] = emitterRow;
-    steps.partner[at] = partnerRow;
-    steps.recoiler[at] = partnerRow;
-    steps.i[at] = row;
-    steps.j[at] = row + 1;
-    steps.recoilerAfter[at] = row + 2;
-    steps.ratio[at] = sampler.ratio;
-    steps.rejected[at] = sampler.rejected;
-    steps.previous[at] = step - 1;
-    steps.noEmission[at] = NaN;
-    steps.generation[at] = generation;
-    steps.length = at + 1;
+  /** What the sampler found, with an azimuth from the block of random numbers that it left. */
+  private takeFound(): void {
+    const { sampler, branching } = this;
+    const splitting = sampler.channel === G_QQ;
+    branching.dipole = sampler.dipole;
+    branching.fromColourEnd = sampler.fromColourEnd;
+    branching.channel = sampler.channel;
+    branching.flavour = splitting ? sampler.flavour : 0;
+    branching.quarkMass = splitting ? sampler.quarkMass : 0;
+    branching.t = sampler.t;
+    branching.z = sampler.z;
+    branching.y = sampler.y;
+    branching.kT = Math.sqrt(sampler.kT2);
+    branching.azimuth = 2 * PI * uniform(this.random.x0);
+    branching.alphaS = sampler.alphaS;
+    branching.ratio = sampler.ratio;
+    branching.rejected = sampler.rejected;
   }
-}
-
-/** Opening angle from 2 pi.pj as the shower knows it: an angle that the momenta can be held against. */
-function claimedAngle(state: DipoleState, i: number, j: number, twicePiPj: number): number {
-  const { after } = state;
-  const mi2 = state.mass[i] * state.mass[i];
-  const mj2 = state.mass[j] * state.mass[j];
-  const pi2 = after[3] * after[3] - mi2;
-  const ee = after[3] * after[7];
-  const pp = mi2 === 0 && mj2 === 0 ? ee : Math.sqrt(pi2 * (after[7] * after[7] - mj2));
-  // |pi||pj| (1 - cos) = pi.pj - (Ei Ej - |pi||pj|)
-  const apart = twicePiPj - (2 * (mi2 * after[7] * after[7] + mj2 * pi2)) / (ee + pp);
-  const half = Math.max(apart, 0);
-  return 2 * atan2(Math.sqrt(half), Math.sqrt(Math.max(4 * pp - half, 0)));
-}
-
-/** A row without colour: nine numbers because it runs in the inner loop and an object would be an allocation. */
-function writeRow(
-  entries: MutableEntries,
-  at: number,
-  id: number,
-  px: number,
-  py: number,
-  pz: number,
-  e: number,
-  m: number,
-  role: number,
-): void {
-  entries.id[at] = id;
-  entries.px[at] = px;
-  entries.py[at] = py;
-  entries.pz[at] = pz;
-  entries.e[at] = e;
-  entries.m[at] = m;
-  entries.colour[at] = 0;
-  entries.anticolour[at] = 0;
-  entries.from[at] = -1;
-  entries.madeBy[at] = -1;
-  entries.endedBy[at] = -1;
-  entries.role[at] = role;
-  entries.line[at] = -1;
-}
-
-/** The row of a living parton as its slot stands. */
-function writeParton(
-  entries: MutableEntries,
-  at: number,
-  state: DipoleState,
-  slot: number,
-  from: number,
-  madeBy: number,
-  role: number,
-): void {
-  const momentum = 4 * slot;
-  entries.id[at] = state.id[slot];
-  entries.px[at] = state.momenta[momentum];
-  entries.py[at] = state.momenta[momentum + 1];
-  entries.pz[at] = state.momenta[momentum + 2];
-  entries.e[at] = state.momenta[momentum + 3];
-  entries.m[at] = state.mass[slot];
-  entries.colour[at] = state.colour[slot];
-  entries.anticolour[at] = state.anticolour[slot];
-  entries.from[at] = from;
-  entries.madeBy[at] = madeBy;
-  entries.endedBy[at] = -1;
-  entries.role[at] = role;
-  entries.line[at] = slot;
 }

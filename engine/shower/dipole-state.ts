@@ -76,6 +76,17 @@ export class DipoleState {
   }
 
   /**
+   * 1 - z with its digits, made from what a history records, so that a replay of its tables gives the same bits.
+   *
+   * Massless kT^2 = z (1-z) y Q^2 has them all; with masses, where 1-z only scales later dipoles, the difference does.
+   */
+  emissionFraction(dipole: number, z: number, y: number, kT: number, quarkMass: number): number {
+    if (this.mass[this.colourEnd[dipole]] > 0 || this.mass[this.anticolourEnd[dipole]] > 0 || quarkMass > 0)
+      return 1 - z;
+    return (kT * kT) / (z * y * this.q2[dipole]);
+  }
+
+  /**
    * Branch one end of a dipole; the partner at the other end recoils.
    *
    * @param fromColourEnd whether the emitter is the dipole's colour end.
@@ -114,7 +125,13 @@ export class DipoleState {
       if (massive) this.remeasure(partnerOther);
       else this.setQ2(partnerOther, this.q2[partnerOther] * (1 - y));
     }
-    if (emitterOther >= 0) this.remeasure(emitterOther);
+    if (emitterOther >= 0) {
+      // between two gluons that share both lines the splitting leaves either quark with the partner: known as well as
+      // the first dipole, and the same whichever of the two lines radiated
+      if (emitterOther === partnerOther && flavour !== 0)
+        this.setQ2(emitterOther, (fromColourEnd ? w : z) * (1 - y) * q2);
+      else this.remeasure(emitterOther);
+    }
     return j;
   }
 

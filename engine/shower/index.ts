@@ -1,5 +1,6 @@
 export type { Grower } from './dipole-shower.ts';
 export { createGrower, growEvent } from './grow.ts';
+export { RegrowError } from './resume.ts';
 export {
   DEFAULT_SETTINGS,
   describeSettings,
