@@ -17,7 +17,7 @@ export function worstCoherence(batch: HistoryBatch, n: number): number {
   for (let step = batch.stepStart[n]; step < batch.stepStart[n + 1]; step++) {
     const opening = rowsAngle(batch, n, steps.i[step], steps.j[step]);
     const ratio = opening / rowsAngle(batch, n, steps.emitter[step], steps.partner[step]);
-    if (ratio > worst || worst !== worst) worst = ratio;
+    if (ratio > worst || Number.isNaN(worst)) worst = ratio;
   }
   return worst;
 }

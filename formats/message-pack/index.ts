@@ -1,2 +1,2 @@
-export { decodeMessagePack, MessagePackError, type Unpacked } from './decode.ts';
-export { encodeMessagePack, type Packable } from './encode.ts';
+export { decodeMessagePack, encodeMessagePack, type Packable, type Unpacked } from './message-pack.ts';
+export { MessagePackError } from './message-pack-error.ts';

@@ -1,2 +1,0 @@
-export { inflate } from './inflate.ts';
-export { PlaneDeflater } from './plane-deflater.ts';
