@@ -62,7 +62,7 @@ export const MEASURE_DEFINITIONS: readonly MeasureDefinition[] = [
     'evolution variable',
     't',
     'unit of t',
-    'The evolution variable recomputed from the momenta: z(1−z) y Q² in kt ordering, y Q² in virtuality ordering, Q² = 2 pij·pk before the step.',
+    'The evolution variable recomputed from the momenta, Q² = 2 pij·pk before the step: z(1−z) y Q² in kt ordering, y Q² in virtuality ordering; with masses z(1−z) (pi + pj)² − (1−z) mi² − z mj² and (pi + pj)² − mij².',
   ),
   define(
     'zLightCone',
@@ -84,7 +84,7 @@ export const MEASURE_DEFINITIONS: readonly MeasureDefinition[] = [
     'transverse momentum',
     "k _'T",
     'GeV',
-    'Of the emission j in the rest frame of the dipole, about the axis of emitter and partner before the step.',
+    'Of the emission j in the rest frame of the dipole, about the axis of emitter and partner before the step; with a massive partner smaller than the kT of the evolution variable.',
   ),
   define(
     'kTSofter',

@@ -35,6 +35,18 @@ describe.each(['kt', 'virtuality'] as const)('claims in %s ordering', (order) =>
     for (const found of Object.values(worst)) expect(found).toBeLessThan(1e-8);
   });
 
+  it('follow from the rows to 1e-6 for heavy quarks, slow and fast', () => {
+    for (const energy of [15, 91.1876, 1e5]) {
+      const { smallestY, steps, ...worst } = worstClaims(
+        { order, energy, masses: true, cutoff: 0.6, flavours: 5 },
+        400,
+      );
+      expect(steps).toBeGreaterThan(400);
+      // 1e-16 over the smallest angle kT/E, twice because energy and mass are rounded too
+      for (const found of Object.values(worst)) expect(found).toBeLessThan(1e-9);
+    }
+  });
+
   it('follow from the rows to 1e-6 in the narrow dipoles of long showers', () => {
     const { smallestY, steps, ...worst } = worstClaims(
       { order, energy: 1e6, cutoff: 1, coupling: { kind: 'fixed', value: 0.12 } },

@@ -44,8 +44,12 @@ export function brokenColourChains(history: History): string[] {
   for (let step = -1; step < history.steps.length; step++) {
     const lines = coloursAlive(history, step);
     const next = new Map<number, number>();
-    lines.tag.forEach((_, n) => {
-      next.set(lines.colourEnd[n], lines.anticolourEnd[n]);
+    lines.tag.forEach((tag, n) => {
+      const { [n]: colourEnd } = lines.colourEnd;
+      const { [n]: anticolourEnd } = lines.anticolourEnd;
+      if (colourEnd < 0 || anticolourEnd < 0)
+        breaches.push(`after step ${step}: line ${tag} has a loose end`);
+      else next.set(colourEnd, anticolourEnd);
     });
     const passed = new Set<number>();
     const walk = (from: number): number => {

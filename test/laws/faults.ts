@@ -126,6 +126,17 @@ export const FAULTS = {
     return undefined;
   }),
   'tags of i and j exchanged': onStep(({ entries, steps }, step) => {
+    // two gluons that share both lines may radiate through either: exchanged tags are the other way to do it
+    const { colour, anticolour } = entries;
+    const { [step]: emitter } = steps.emitter;
+    const { [step]: partner } = steps.partner;
+    if (
+      colour[emitter] !== 0 &&
+      colour[emitter] === anticolour[partner] &&
+      anticolour[emitter] !== 0 &&
+      anticolour[emitter] === colour[partner]
+    )
+      return false;
     exchange(entries.colour, steps.i[step], steps.j[step]);
     exchange(entries.anticolour, steps.i[step], steps.j[step]);
     return undefined;

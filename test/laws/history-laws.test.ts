@@ -120,11 +120,13 @@ const events = fc.sample(history, { seed: 20, numRuns: 200 });
 const setting = ({ head }: History) => ({ ...head.shower, seed: head.seed, stream: head.stream });
 
 describe('the events of random settings', () => {
-  it('are of both orderings, all couplings, with and without trials, from empty to long', () => {
+  it('are of every kind that there is, from empty to long', () => {
     const seen = (name: string) => new Set(events.map(({ head }) => String(head.shower[name]).split(':')[0]));
     expect(seen('order').size).toBe(2);
     expect(seen('coupling').size).toBe(3);
-    expect(seen('cmw').size).toBe(2);
+    expect(seen('process').size).toBe(3);
+    for (const name of ['cmw', 'masses', 'velocity-factors', 'first-emission'])
+      expect(seen(name).size).toBe(2);
     expect(seen('flavours').size).toBe(6);
     expect(seen('quark').size).toBeGreaterThan(4);
     expect(events.filter(({ trials }) => trials === null).length).toBeGreaterThan(50);

@@ -18,6 +18,7 @@ const coupling: fc.Arbitrary<GrowSettings['coupling']> = fc.oneof(
 );
 
 const some: fc.Arbitrary<Partial<GrowSettings>> = fc.record({
+  process: fc.constantFrom('ee' as const, 'ee' as const, 'scalar-gg' as const, 'scalar-bb' as const),
   energy: spread(0.7, 5),
   seed: fc.oneof(fc.nat(), fc.maxSafeNat()),
   order: fc.constantFrom('kt' as const, 'virtuality' as const),
@@ -27,6 +28,9 @@ const some: fc.Arbitrary<Partial<GrowSettings>> = fc.record({
   cutoff: spread(-0.3, 1),
   flavours: fc.integer({ min: 0, max: 5 }),
   quark: fc.constantFrom(null, 1, 2, 3, 4, 5),
+  masses: fc.boolean(),
+  velocityFactors: fc.constantFrom('unit' as const, 'published' as const),
+  firstEmission: fc.constantFrom('kernel' as const, 'matched' as const),
   trials: fc.boolean(),
 });
 
