@@ -1,3 +1,4 @@
+export { historyToJson, type JsonElement, type JsonHistory, type JsonTable, jsonText } from './json/index.ts';
 export {
   ChunkEncoder,
   type EncodedChunk,
