@@ -1,5 +1,7 @@
 export { type Place, placeFragment, readPlace } from './address.ts';
+export { followAddress } from './address-bar.ts';
 export type { EventFile, OpenedFile, SummaryColumns } from './event-file.ts';
+export { damageText, openShowerFile } from './open-shower-file.ts';
 export { type Frames, Playhead, SPEEDS } from './playhead.ts';
 export { stepNumber } from './step-number.ts';
 export { Store, type StoreParts, type Theme, type ViewerState } from './store.ts';

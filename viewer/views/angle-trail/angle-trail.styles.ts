@@ -143,6 +143,7 @@ export const angleTrailStyles = css`
     }
     .key .sample {
       width: 14px;
+      overflow: hidden;
     }
     .choices .what {
       display: none;

@@ -58,6 +58,7 @@ export class AngleTrailElement extends LitElement {
   #passed = -2;
   #leave: (() => void) | undefined;
   #observer: ResizeObserver | undefined;
+  #watched: Element | null = null;
 
   override connectedCallback(): void {
     super.connectedCallback();
@@ -65,6 +66,7 @@ export class AngleTrailElement extends LitElement {
       this.width = entry.contentRect.width;
       this.height = entry.contentRect.height;
     });
+    if (this.#watched) this.#observer.observe(this.#watched);
   }
 
   override disconnectedCallback(): void {
@@ -72,10 +74,6 @@ export class AngleTrailElement extends LitElement {
     this.#observer?.disconnect();
     this.#leave?.();
     this.#leave = undefined;
-  }
-
-  protected override firstUpdated(): void {
-    this.#watchPlot();
   }
 
   override willUpdate(): void {
@@ -103,7 +101,10 @@ export class AngleTrailElement extends LitElement {
 
   #watchPlot(): void {
     const plot = this.renderRoot.querySelector('.plot');
+    if (plot === this.#watched) return;
+    if (this.#watched) this.#observer?.unobserve(this.#watched);
     if (plot) this.#observer?.observe(plot);
+    this.#watched = plot;
   }
 
   get #playhead(): Playhead | undefined {

@@ -40,7 +40,7 @@ export const appStyles = css`
   .right {
     grid-area: right;
     display: grid;
-    grid-template-rows: minmax(150px, 1fr) minmax(0, 592px);
+    grid-template-rows: minmax(150px, 1fr) minmax(0, 614px);
     row-gap: 14px;
     min-height: 0;
     min-width: 0;

@@ -2,7 +2,14 @@ import { ContextProvider } from '@lit/context';
 import { html, LitElement, nothing } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
 import { blobSource } from '../../../formats/index.ts';
-import { applyTheme, SPEEDS, type Store, storeContext, type ViewerState } from '../../state/index.ts';
+import {
+  applyTheme,
+  followAddress,
+  SPEEDS,
+  type Store,
+  storeContext,
+  type ViewerState,
+} from '../../state/index.ts';
 import type { BarElement, Command, CommandEvent, GoToEventEvent, NeighbourEvent } from '../bar/index.ts';
 import '../angle-trail/index.ts';
 import '../ball/index.ts';
@@ -10,13 +17,11 @@ import '../bar/index.ts';
 import '../card/index.ts';
 import '../clock/index.ts';
 import '../events/index.ts';
-import '../help/index.ts';
+import { type KeyCommand, keyCommand } from '../help/index.ts';
 import '../notice/index.ts';
-import { followAddress } from './address-bar.ts';
 import { appStyles } from './app.styles.ts';
 import { download } from './download.ts';
 import { FileDrop } from './file-drop.ts';
-import { type KeyCommand, keyCommand } from './key-commands.ts';
 
 /** Dots per CSS pixel of a saved picture. */
 const PNG_SCALE = 3;

@@ -83,6 +83,9 @@ export const cardStyles = css`
     text-overflow: ellipsis;
     cursor: help;
   }
+  .term:focus-visible {
+    outline-offset: -1px;
+  }
   .term:hover {
     text-decoration: none;
   }
@@ -138,9 +141,14 @@ export const cardStyles = css`
   }
   dl {
     display: grid;
-    grid-template-columns: minmax(8.5em, max-content) 1fr;
-    gap: 0 18px;
-    margin: 5px 0 0;
+    grid-template-columns: 11.2em 1fr;
+    gap: 0 14px;
+    margin: 6px 0 0;
+  }
+  dl.settings {
+    grid-template-columns: 11.2em 1fr 8em 1fr;
+    border-top: 1px solid var(--rule);
+    padding-top: 5px;
   }
   dt {
     color: var(--second);
@@ -177,6 +185,9 @@ export const cardStyles = css`
     }
   }
   @container card (max-width: 430px) {
+    dl.settings {
+      grid-template-columns: 11.2em 1fr;
+    }
     .quantities .name-column,
     .quantities .name {
       display: none;

@@ -61,8 +61,8 @@ export class CardElement extends LitElement {
       </header>
       <div class="body">
         ${eventRows(history, partons).map(
-          (rows) =>
-            html`<dl>${rows.map(({ name, value }) => html`<dt>${name}</dt><dd>${notation(value)}</dd>`)}</dl>`,
+          (rows, group) =>
+            html`<dl class=${group === 2 ? 'settings' : ''}>${rows.map(({ name, value }) => html`<dt>${name}</dt><dd>${notation(value)}</dd>`)}</dl>`,
         )}
         ${
           rerun

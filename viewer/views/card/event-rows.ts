@@ -14,6 +14,9 @@ const ORDER: Readonly<Record<string, string>> = {
   own: 'own variable',
 };
 
+/** Settings that are energies. */
+const IN_GEV = new Set(['energy', 'cutoff']);
+
 /** A setting under its command-line name as its value would be typed there. */
 export function settingText(value: string | number | boolean | null): string {
   if (value === null) return '—';
@@ -65,11 +68,14 @@ export function eventRows(history: History, finalPartons: number): EventRow[][] 
     { name: 'resolution', value: `*k*_{T}^{2} ≥ ${shortNumber(head.cutoff)} GeV^{2}` },
     { name: 'ordering', value: head.ordering },
   ];
-  const settings = Object.entries(head.shower).map(([name, value]) => ({ name, value: settingText(value) }));
+  const settings = Object.entries(head.shower).map(([name, value]) => ({
+    name,
+    value: typeof value === 'number' && IN_GEV.has(name) ? `${settingText(value)} GeV` : settingText(value),
+  }));
   const origin: EventRow[] = [
     { name: 'producer', value: `${head.producer.name} ${head.producer.version}` },
     { name: 'seed', value: head.seed === null ? '—' : String(head.seed) },
     { name: 'stream', value: head.stream === null ? '—' : String(head.stream) },
   ];
-  return [about, evolution, settings, origin];
+  return [[...about, ...origin], evolution, settings];
 }

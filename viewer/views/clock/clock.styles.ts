@@ -42,7 +42,7 @@ export const clockStyles = css`
   }
   .key span {
     display: inline-flex;
-    align-items: center;
+    align-items: baseline;
     gap: 5px;
   }
   .now {
@@ -61,6 +61,9 @@ export const clockStyles = css`
   }
   .head {
     fill: var(--ink);
+  }
+  .key svg {
+    align-self: center;
   }
   .key .stem,
   .key .head {

@@ -5,7 +5,7 @@ export const eventsStyles = css`
     display: flex;
     flex-direction: column;
     min-height: 0;
-    --columns: 4.2em 3.1em minmax(0, 1fr) 4.6em;
+    --columns: 3.6em 2.8em minmax(0, 1fr) 5.8em;
   }
   .order {
     display: flex;

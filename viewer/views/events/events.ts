@@ -1,6 +1,6 @@
 import { html, LitElement, nothing, type PropertyValues, svg } from 'lit';
 import { customElement, state } from 'lit/decorators.js';
-import { styleMap } from 'lit/directives/style-map.js';
+import { ifDefined } from 'lit/directives/if-defined.js';
 import { type EventFile, StoreSlice } from '../../state/index.ts';
 import {
   controlStyles,
@@ -27,7 +27,7 @@ const QUANTITIES: Readonly<Record<OrderKey, { name: string; head: string; defini
   finalPartons: { name: 'final partons', head: 'partons', definition: 'partons at the end of the shower' },
   hardestKT: {
     name: 'hardest kT',
-    head: '*k*_{T,max}/GeV',
+    head: '*k*_{T,max} [GeV]',
     definition: 'largest kT of the event’s steps [GeV]',
   },
   worstCoherence: {
@@ -61,14 +61,15 @@ export class EventsElement extends LitElement {
   #placeOf: Uint32Array | null = null;
   #shown = -1;
   #observer: ResizeObserver | undefined;
+  #watched: HTMLElement | null = null;
 
   override connectedCallback(): void {
     super.connectedCallback();
     this.#observer = new ResizeObserver(([entry]) => {
       this.boxHeight = entry.contentRect.height;
+      this.#shown = -1;
     });
-    const box = this.#box;
-    if (box) this.#observer.observe(box);
+    if (this.#watched) this.#observer.observe(this.#watched);
   }
 
   override disconnectedCallback(): void {
@@ -102,14 +103,27 @@ export class EventsElement extends LitElement {
 
   protected override updated(_changed: PropertyValues): void {
     const box = this.#box;
+    if (box !== this.#watched) {
+      if (this.#watched) this.#observer?.unobserve(this.#watched);
+      if (box) this.#observer?.observe(box);
+      this.#watched = box;
+    }
     if (!box) return;
-    this.#observer?.observe(box);
+    this.#place(box);
     const event = this.#event.value ?? -1;
     if (event !== this.#shown && event >= 0 && this.boxHeight > 0) {
       this.#shown = event;
       this.#reveal(event);
     }
     this.#read();
+  }
+
+  // By script and not by style attributes, which a strict content policy drops.
+  #place(box: HTMLElement): void {
+    const { top, height } = this.#window;
+    const content = box.firstElementChild as HTMLElement;
+    content.style.height = `${height}px`;
+    (content.firstElementChild as HTMLElement).style.transform = `translateY(${top}px)`;
   }
 
   // Ask for what the rows in view need.
@@ -153,7 +167,7 @@ export class EventsElement extends LitElement {
     if (!this.#file) return nothing;
     const shownKey: SummaryKey = this.key === 'event' || this.key === 'branchings' ? 'hardestKT' : this.key;
     const quantity = QUANTITIES[shownKey];
-    const { from, to, top, height } = this.#window;
+    const { from, to } = this.#window;
     return html`
       <header>
         <h2>Events</h2>
@@ -175,15 +189,23 @@ export class EventsElement extends LitElement {
         <span>event</span><span>steps</span><span class="along">${notation('along *L*')}</span>
         <span title=${quantity.definition}>${notation(quantity.head)}</span>
       </div>
-      <div class="box" role="listbox" tabindex="0" aria-label="events" aria-activedescendant="row-${this.#event.value}"
+      <div class="box" role="listbox" tabindex="0" aria-label="events" aria-activedescendant=${ifDefined(this.#activeRow)}
         @scroll=${this.#scroll} @keydown=${this.#press} @click=${this.#click}>
-        <div class="content" role="presentation" style=${styleMap({ height: `${height}px` })}>
-          <div class="rows" role="presentation" style=${styleMap({ transform: `translateY(${top}px)` })}>
+        <div class="content" role="presentation">
+          <div class="rows" role="presentation">
             ${Array.from({ length: to - from }, (_, k) => this.#row(from + k, shownKey))}
           </div>
         </div>
       </div>
     `;
+  }
+
+  // Only a row that is there can be the active one.
+  get #activeRow(): string | undefined {
+    const { from, to } = this.#window;
+    const event = this.#event.value ?? -1;
+    const place = event < 0 ? -1 : this.#placeOfEvent(event);
+    return place >= from && place < to ? `row-${event}` : undefined;
   }
 
   #row(place: number, key: SummaryKey) {

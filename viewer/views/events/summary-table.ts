@@ -61,7 +61,11 @@ export class SummaryTable {
     const from = page * PAGE;
     const to = Math.min(from + PAGE, this.eventCount);
     const found = await this.#file.summaries(from, to);
-    for (const key of SUMMARY_KEYS) this.#columns[key].set(found[key], from);
+    for (const key of SUMMARY_KEYS) {
+      const column = this.#columns[key];
+      // Whole numbers that are not known are −1.
+      for (let k = 0; k < to - from; k++) column[from + k] = found[key][k] < 0 ? NaN : found[key][k];
+    }
   }
 }
 

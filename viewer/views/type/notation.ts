@@ -31,6 +31,6 @@ function addSymbols(runs: Run[], text: string, height: Run['height']): void {
 /** The same text for a reader of plain text: `kT`, `10^−14`. */
 export function plainNotation(source: string): string {
   return parseNotation(source)
-    .map((run) => (run.height === 'raised' && /^[−\d]/.test(run.text) ? `^${run.text}` : run.text))
+    .map((run) => (run.height === 'raised' && /^−?\d/.test(run.text) ? `^${run.text}` : run.text))
     .join('');
 }

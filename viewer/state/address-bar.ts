@@ -1,4 +1,5 @@
-import { placeFragment, readPlace, type Store } from '../../state/index.ts';
+import { placeFragment, readPlace } from './address.ts';
+import type { Store } from './store.ts';
 
 /**
  * Keeps the fragment of the page's address at the event and step on the screen, so that it reopens them, and follows it
