@@ -56,6 +56,12 @@ export class Philox {
     this.draw = 0;
   }
 
+  /** Start anywhere in the event's numbers. @param step, @param draw any 32-bit words. */
+  startAt(step: number, draw: number): void {
+    this.step = step | 0;
+    this.draw = draw | 0;
+  }
+
   /** Make the next block. Two rounds to a turn, on keys made once an event: a quarter faster than round by round. */
   block(): void {
     const keys = this.roundKeys;

@@ -48,6 +48,9 @@ export class BranchingTree {
   /** Key of the line that the branching opens. */
   newWord = new Int32Array(256);
   newDraw = new Int32Array(256);
+  /** Row and parton line of the history. */
+  row = new Int32Array(256);
+  line = new Int32Array(256);
   /** Squared virtuality [GeV^2]. */
   q2 = new Float64Array(256);
   /** Transverse momentum in the jet's own basis [GeV]. */
@@ -126,10 +129,14 @@ export class BranchingTree {
   private grow(): void {
     const columns = this as unknown as Record<string, unknown>;
     for (const [name, column] of Object.entries(columns)) {
-      if (!(column instanceof Float64Array || column instanceof Int32Array)) continue;
-      const wider = new (column.constructor as new (length: number) => typeof column)(2 * column.length);
-      wider.set(column as never);
-      columns[name] = wider;
+      if (column instanceof Float64Array) columns[name] = widen(column, new Float64Array(2 * column.length));
+      if (column instanceof Int32Array) columns[name] = widen(column, new Int32Array(2 * column.length));
     }
   }
+}
+
+/** The same column in longer memory. */
+function widen<T extends Float64Array | Int32Array>(column: T, memory: T): T {
+  memory.set(column);
+  return memory;
 }

@@ -1,5 +1,4 @@
 import { exp, log, log1p } from '../../math/index.ts';
-import type { RunningCoupling } from '../../qcd/index.ts';
 
 /** How the two evolution variables differ in the sampler's coordinates; see TrialWindows. */
 export interface Evolution {
@@ -42,7 +41,7 @@ export class TrialWindows {
 
   /** @param alphaS at ln(mu^2/GeV^2), falling. @param lnCut2 ln pTmin^2. @param highest largest u. */
   constructor(
-    alphaS: RunningCoupling['atLog'],
+    alphaS: (lnMu2: number) => number,
     lnCut2: number,
     highest: number,
     { shift }: Pick<Evolution, 'shift'>,

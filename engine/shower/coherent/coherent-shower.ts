@@ -1,0 +1,123 @@
+import type { HistoryBatch, SampleHead } from '../../history/index.ts';
+import type { HardProcess } from '../../processes/index.ts';
+import { quarkMass } from '../../qcd/index.ts';
+import { Philox } from '../../random/index.ts';
+import { makeProcess } from '../make-process.ts';
+import { type GrowSettings, makeCoupling } from '../settings.ts';
+import { BranchingTree } from './branching-tree.ts';
+import { coherentHead } from './coherent-head.ts';
+import { type FinishedEvent, recordEvent } from './coherent-record.ts';
+import { ColourChain } from './colour-chain.ts';
+import { evolveByAngle, evolveByVirtuality } from './evolve-lines.ts';
+import { buildVirtualities, JetMomenta, keepVirtualities } from './jet-momenta.ts';
+import { LineSampler } from './line-sampler.ts';
+import { PlaybackOrder } from './playback-order.ts';
+import { TrialLog } from './trial-log.ts';
+import { ANGLE, VIRTUALITY } from './trial-windows.ts';
+
+/** Number under which the keys of the roots' lines are drawn, block r for the r-th time that the event is grown. */
+const ROOT_KEYS = 1;
+
+/**
+ * Coherent branching (angular ordering) behind two colour-connected partons, or the incoherent cascade.
+ *
+ * Lines evolve each by itself, then the jets are reconstructed; where their masses add up to more than sqrt(s), the
+ * whole event but its hard process is grown again from its next random numbers.
+ *
+ * Source: Marchesini & Webber, Nucl. Phys. B310 (1988) 461; Gieseke, Stephens, Webber, JHEP 12 (2003) 045.
+ */
+export class CoherentShower {
+  readonly sample: SampleHead;
+  /** How often the last event was grown again. */
+  regrown = 0;
+  private readonly settings: GrowSettings;
+  private readonly coherent: boolean;
+  private readonly random = new Philox();
+  private readonly process: HardProcess;
+  private readonly sampler: LineSampler;
+  private readonly tree = new BranchingTree();
+  private readonly order = new PlaybackOrder();
+  private readonly jets = new JetMomenta();
+  private readonly log: TrialLog | null;
+  private readonly event: FinishedEvent;
+
+  /** @param coherent false: the incoherent cascade. */
+  constructor(settings: GrowSettings, coherent: boolean) {
+    this.settings = settings;
+    this.coherent = coherent;
+    this.process = makeProcess(settings);
+    this.sample = coherentHead(settings, coherent, this.process);
+    this.log = settings.trials ? new TrialLog() : null;
+    this.sampler = new LineSampler({
+      coupling: makeCoupling(settings),
+      cmw: settings.cmw,
+      evolution: coherent ? ANGLE : VIRTUALITY,
+      angularBound: !coherent,
+      flavours: settings.flavours,
+      mass: (flavour) => (settings.masses ? quarkMass(flavour) : 0),
+      cutoff: settings.cutoff,
+      sqrtS: settings.energy,
+    });
+    this.event = {
+      tree: this.tree,
+      order: this.order,
+      jets: this.jets,
+      chain: new ColourChain(),
+      process: this.process,
+      generatedPT: coherent,
+    };
+  }
+
+  grow(batch: HistoryBatch, stream: number, event: number = stream): void {
+    const { random, process, settings, tree, jets, log } = this;
+    random.startEvent(settings.seed, stream);
+    process.generate(random);
+    this.regrown = 0;
+    while (!this.evolve()) this.regrown++;
+    this.order.sort(tree);
+    jets.start(process.momenta);
+    recordEvent(batch, this.event);
+    log?.write(batch, tree, this.order);
+    batch.endEvent({
+      event,
+      label: null,
+      stream,
+      rerun: null,
+      status: 'complete',
+      statusReason: null,
+      outgoing: [...process.outgoing],
+      weight: 1,
+    });
+  }
+
+  /** Grow both jets. @returns false where they are too heavy for the event. */
+  private evolve(): boolean {
+    const { random, process, tree, sampler, log, coherent } = this;
+    log?.clear();
+    tree.clear();
+    random.startAt(ROOT_KEYS, this.regrown);
+    random.block();
+    const { outgoing, masses, sqrtS } = process;
+    tree.addRoot(outgoing[0], masses[0], this.largestT(0), random.x0, random.x1);
+    tree.addRoot(outgoing[1], masses[1], this.largestT(1), random.x2, random.x3);
+    if (coherent) {
+      evolveByAngle(tree, sampler, random, log);
+      buildVirtualities(tree);
+    } else {
+      evolveByVirtuality(tree, sampler, random, log, sqrtS);
+      keepVirtualities(tree);
+    }
+    return this.jets.balance(sqrtS, tree.q2[0], tree.q2[1]);
+  }
+
+  /** Start of a hard parton: symmetric in qt, Q^2 (1 + b - c + sqrt(lambda(1,b,c)))/2; the whole Q^2 in q^2. */
+  private largestT(root: number): number {
+    const { masses, sqrtS } = this.process;
+    const s = sqrtS * sqrtS;
+    if (!this.coherent) return s;
+    const b = (masses[root] * masses[root]) / s;
+    const c = (masses[1 - root] * masses[1 - root]) / s;
+    const rest = 1 - b - c;
+    return (s * (1 + b - c + Math.sqrt(rest * rest - 4 * b * c))) / 2;
+  }
+}

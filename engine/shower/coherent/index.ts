@@ -1,0 +1,1 @@
+export { CoherentShower } from './coherent-shower.ts';
