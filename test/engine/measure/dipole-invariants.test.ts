@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { branchDipole } from '../../../engine/kinematics/index.ts';
 import { dipoleInvariants, makeDipoleInvariants } from '../../../engine/measure/index.ts';
-import { branchInRestFrame, combine, product, type Vector } from './rest-frame-map.ts';
+import { boost, branchInRestFrame, combine, inRestFrame, product, type Vector } from './rest-frame-map.ts';
 
 /** Invariants of a branching from its five momenta and their masses. */
 function invariants(momenta: readonly (readonly number[])[], masses = [0, 0, 0, 0, 0]) {
@@ -234,6 +234,86 @@ describe('invariants of a dipole branching', () => {
     const rapidity = (p: Vector) => Math.log(product(p, partner) / product(p, emitter)) / 2;
     expect(found.emissionRapidity).toBeCloseTo(rapidity(j), 12);
     expect(found.daughterRapidity).toBeCloseTo(rapidity(i), 12);
+  });
+
+  it('starts the azimuth at z where two axes tie, at y where x and y do', () => {
+    // along an axis the other two are equally transverse; (n1, n2, emitter direction) is right-handed
+    const along: [Vector, Vector, number[]][] = [
+      [of(50, 50, 0, 0), of(50, -50, 0, 0), [0, 0, 1]],
+      [of(50, 0, 50, 0), of(50, 0, -50, 0), [0, 0, 1]],
+      [of(50, 0, 0, 50), of(50, 0, 0, -50), [0, 1, 0]],
+    ];
+    for (const [emitter, partner, origin] of along) {
+      const kick: Vector = [origin[0], origin[1], origin[2], 0];
+      const i = combine([0.6, emitter], [0.001, partner], [1, kick]);
+      const j = combine([0.4, emitter], [0.001, partner], [-1, kick]);
+      for (const p of [i, j]) p[3] = Math.hypot(p[0], p[1], p[2]);
+      const phi = invariants([emitter, partner, i, j, partner]).azimuth;
+      expect(between(phi, 0)).toBeLessThan(1e-12);
+    }
+  });
+
+  it('gives azimuth, kT and rapidities of massive branchings as they are in the rest frame, however they are boosted', () => {
+    const E = [
+      of(50, 0, 0, 49.76906669810074),
+      of(50, 0, 0, -49.76906669810074),
+      of(36.562208, 12.623660316752709, 6.896337061984258, 33.26918678251708),
+      of(18.414752, -12.623660316752709, -6.896337061984258, 11.497253000445334),
+      of(45.02304, 0, 0, -44.766439782962415),
+    ];
+    const F = [
+      of(50, 0, 0, 50),
+      of(50, 0, 0, -50),
+      of(21.631328, -4.31402467342284, 9.42631588252266, 18.368672),
+      of(31.087552, 4.31402467342284, -9.42631588252266, 28.912448),
+      of(47.28112, 0, 0, -47.28112),
+    ];
+    // a heavy emitter and a massless partner: E with its light partner replaced, so that only one side has a mass
+    const points: [Vector[], number[]][] = [
+      [E, [4.8, 4.8, 4.8, 0, 4.8]],
+      [F, [0, 0, 4.8, 4.8, 0]],
+      [
+        [E[0], F[1], E[2], E[3], F[4]],
+        [4.8, 0, 4.8, 0, 0],
+      ],
+      [
+        [F[0], E[1], F[2], F[3], E[4]],
+        [0, 4.8, 4.8, 4.8, 4.8],
+      ],
+    ];
+    fc.assert(
+      fc.property(real(-2, 2), real(-2, 2), real(-2, 2), (bx, by, bz) => {
+        const frame: Vector = [bx, by, bz, Math.sqrt(1 + bx * bx + by * by + bz * bz)];
+        for (const [momenta, masses] of points) {
+          const [emitter, partner, i, j, after] = momenta.map((p) => boost(p, frame));
+          fc.pre(!axesTie(emitter, partner));
+          const found = invariants([emitter, partner, i, j, after], masses);
+          const restI = inRestFrame(i, emitter, partner);
+          const restJ = inRestFrame(j, emitter, partner);
+          expect(between(found.azimuth, turnTo(restI.azimuth))).toBeLessThan(1e-11);
+          expect(Math.abs(found.kT / restJ.kT - 1)).toBeLessThan(1e-11);
+          expect(Math.abs(found.daughterRapidity - restI.rapidity)).toBeLessThan(1e-11);
+          expect(Math.abs(found.emissionRapidity - restJ.rapidity)).toBeLessThan(1e-11);
+          expect(
+            Math.abs(found.z - product(i, after) / (product(i, after) + product(j, after))),
+          ).toBeLessThan(1e-11);
+        }
+      }),
+      { seed: 7, numRuns: 200 },
+    );
+  });
+
+  it('believes the mass column, so that momenta printed with nine digits still give y to 1e-6', () => {
+    const y = 1e-4;
+    const digits = (p: Vector) => p.map((c) => Number(c.toPrecision(9)));
+    const [emitter, partner] = POINTS[3].before;
+    const [i, j, k] = branchInRestFrame(emitter, partner, y, 0.6, 1);
+    const found = invariants([emitter, partner, i, j, k].map(digits));
+    expect(Math.abs(found.y / y - 1)).toBeLessThan(1e-6);
+    // but not against an energy that is off by more: then the momenta speak
+    const heavy = [...i.slice(0, 3), Math.hypot(i[3], 5)];
+    const off = invariants([emitter, partner, heavy, j, k]);
+    expect(off.pairMass2).toBeGreaterThan(25);
   });
 
   it('gives NaN where a momentum is missing', () => {

@@ -27,6 +27,21 @@ describe('peak of a hump', () => {
       for (const pile of [0, 3000, 30000]) expect(peakOf(bins(hump(peak, pile)))).toBeCloseTo(peak, 2);
   });
 
+  it('does not take in the leading partons behind a shallow dip', () => {
+    const content = (x: number) =>
+      1000 * Math.exp(-0.7 * (x - 2) ** 2) +
+      3000 * Math.exp(-3 * x) +
+      250 * Math.exp(-((x - 0.8) ** 2) / 0.3);
+    let [top, dip] = [2, 2];
+    for (let x = 0.3; x < 3; x += 1e-4) {
+      if (x > 1.5 && content(x) > content(top)) top = x;
+      if (x < 2 && content(x) < content(dip)) dip = x;
+    }
+    expect(content(dip) / content(top)).toBeLessThan(0.95);
+    expect(content(dip) / content(top)).toBeGreaterThan(0.72);
+    expect(Math.abs(peakOf(bins(content)) - top)).toBeLessThan(0.04);
+  });
+
   it('is missing where there is none', () => {
     expect(peakOf(bins((x) => 100 * Math.exp(-x)))).toBeNaN();
     expect(peakOf(bins(() => 0))).toBeNaN();

@@ -128,6 +128,18 @@ describe('measured steps', () => {
     }
   });
 
+  it('keep the digits of the Lund coordinates of a pair that is nearly parallel or nearly opposite', () => {
+    for (const theta of [1e-7, 1e-3, Math.PI - 1e-3, Math.PI - 1e-7]) {
+      const i: Vector = [0, 0, 30, 30];
+      const j: Vector = [20 * Math.sin(theta), 0, 20 * Math.cos(theta), 20];
+      const rows = [row(quark, { role: role('hard') }), row(i, { madeBy: 0 }), row(j, { madeBy: 0 })];
+      const found = measureSteps(historyByHand(rows, [{ t: 1, emitter: 0, i: 1, j: 2 }]));
+      // the sine of pi - 1e-7 as JavaScript knows it is good to 1e-9 of itself
+      expect(Math.abs(found.eta[0] / -Math.log(Math.tan(theta / 2)) - 1)).toBeLessThan(1e-10);
+      expect(Math.abs(found.openingAngle[0] / theta - 1)).toBeLessThan(1e-10);
+    }
+  });
+
   it('name the softer daughter, its rapidity, and the leaf on which the emitter lives', () => {
     const { e } = history.entries;
     for (let step = 0; step < 3; step++) {

@@ -21,7 +21,7 @@ export function boost(v: Vector, frame: Vector, direction: 1 | -1 = 1): Vector {
   return [v[0] + factor * p[0], v[1] + factor * p[1], v[2] + factor * p[2], gamma * v[3] - along];
 }
 
-/** Space axes of the event frame as seen in the rest frame of the dipole, and the transverse basis made from them. */
+/** The basis n1, n2 of the azimuth in the rest frame of the dipole, from the space axes as they are seen there. */
 function transverseBasis(emitter: Vector, frame: Vector): [Vector, Vector] {
   const e = boost(emitter, frame);
   const size = Math.hypot(e[0], e[1], e[2]);
@@ -74,4 +74,19 @@ export function branchInRestFrame(
     combine([1 - z, emitter], [z * y, partner], [-1, k]),
     combine([1 - y, partner]),
   ];
+}
+
+/** Azimuth, transverse momentum and rapidity of a momentum in the rest frame of a dipole, about its axis. */
+export function inRestFrame(p: Vector, emitter: Vector, partner: Vector) {
+  const frame = combine([1, emitter], [1, partner]);
+  const [n1, n2] = transverseBasis(emitter, frame);
+  const axis = boost(emitter, frame);
+  const q = boost(p, frame);
+  const along = (v: Vector) => q[0] * v[0] + q[1] * v[1] + q[2] * v[2];
+  const forward = along(axis) / Math.hypot(axis[0], axis[1], axis[2]);
+  return {
+    azimuth: Math.atan2(along(n2), along(n1)),
+    kT: Math.hypot(along(n1), along(n2)),
+    rapidity: Math.log((q[3] + forward) / (q[3] - forward)) / 2,
+  };
 }
