@@ -4,7 +4,7 @@ import { Unpackr } from 'msgpackr/unpack';
 import { checkMessagePack } from './check.ts';
 import { MessagePackError } from './message-pack-error.ts';
 
-/** What MessagePack's standard types can hold, as JavaScript values. A key whose value is undefined is left out. */
+/** What MessagePack's standard types can hold, as JavaScript values. */
 export type Packable =
   | null
   | boolean
@@ -13,7 +13,14 @@ export type Packable =
   | string
   | Uint8Array
   | readonly Packable[]
-  | { readonly [key: string]: Packable | undefined };
+  | { readonly [key: string]: Packable };
+
+/** The same with keys whose value is undefined. */
+export type PackableOrUndefined =
+  | Packable
+  | undefined
+  | readonly PackableOrUndefined[]
+  | { readonly [key: string]: PackableOrUndefined };
 
 /** A value read from MessagePack; integers beyond 2^53 are bigints, binaries views of the message at any alignment. */
 export type Unpacked =
@@ -39,12 +46,12 @@ const unpackr = new Unpackr({
  *
  * Integers of 2^32 and more become float 64, which holds them exactly up to 2^53; -0 becomes 0.
  *
- * @throws TypeError for a value with no standard MessagePack form.
+ * @returns view of memory that is not used again.
+ * @throws TypeError for a value with no standard MessagePack form, undefined included.
  */
 export function encodeMessagePack(value: Packable): Uint8Array {
   try {
-    // A copy, since the library writes one message behind the other into memory of its own.
-    const bytes = new Uint8Array(packr.pack(withoutUndefined(value)));
+    const bytes = packr.pack(value);
     checkMessagePack(bytes);
     return bytes;
   } catch (error) {
@@ -68,14 +75,14 @@ export function decodeMessagePack(bytes: Uint8Array): Unpacked {
   }
 }
 
-function withoutUndefined(value: Packable | undefined): Packable | undefined {
-  if (typeof value !== 'object' || value === null || value instanceof Uint8Array) return value;
-  if (Array.isArray(value)) return value.map((item) => withoutUndefined(item) as Packable);
-  if (Object.getPrototypeOf(value) !== Object.prototype && Object.getPrototypeOf(value) !== null)
-    return value;
+/** A copy of a plain value without the keys whose value is undefined. */
+export function withoutUndefined(value: PackableOrUndefined): Packable {
+  if (Array.isArray(value)) return value.map((item) => withoutUndefined(item));
+  const prototype = typeof value === 'object' && value !== null ? Object.getPrototypeOf(value) : null;
+  if (prototype !== Object.prototype) return value as Packable;
   const kept: Record<string, Packable> = {};
-  for (const [key, item] of Object.entries(value)) {
-    if (item !== undefined) kept[key] = withoutUndefined(item) as Packable;
+  for (const [key, item] of Object.entries(value as Record<string, PackableOrUndefined>)) {
+    if (item !== undefined) kept[key] = withoutUndefined(item);
   }
   return kept;
 }

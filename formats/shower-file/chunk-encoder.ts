@@ -71,7 +71,7 @@ export class ChunkEncoder {
     const payload = encodeMessagePack({
       first,
       events: to - from,
-      channels: channels.own,
+      ...(channels.own && { channels: channels.own }),
       heads: batch.events.slice(from, to).map(packHead),
       rows,
       ...packed,
@@ -129,14 +129,15 @@ export class ChunkEncoder {
   }
 }
 
-/** What of an event's head is no column. */
+const COLUMNS = new Set(['event', 'stream', 'weight']);
+
+/** What of an event's head is no column, and not what a missing key says. */
 function packHead(head: EventHead): Packable {
-  const { event: _event, stream: _stream, weight: _weight, ...rest } = head;
-  return {
-    ...rest,
-    label: head.label ?? undefined,
-    rerun: head.rerun ?? undefined,
-    status: head.status === 'complete' ? undefined : head.status,
-    statusReason: head.statusReason ?? undefined,
-  };
+  const packed: Record<string, Packable> = {};
+  for (const key in head) {
+    const value = head[key as keyof EventHead] as Packable | undefined;
+    const isDefault = value === null || value === undefined || (key === 'status' && value === 'complete');
+    if (!isDefault && !COLUMNS.has(key)) packed[key] = value;
+  }
+  return packed;
 }

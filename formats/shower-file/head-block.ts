@@ -1,5 +1,5 @@
 import { CHANNELS, KINDS, REASONS, ROLES, type SampleHead } from '../../engine/index.ts';
-import { encodeMessagePack, type Packable } from '../message-pack/index.ts';
+import { encodeMessagePack, type PackableOrUndefined, withoutUndefined } from '../message-pack/index.ts';
 import type { ByteSource } from '../sources/index.ts';
 import { asText, decodeBlock, FieldError, Fields, type UnknownKeys } from './fields.ts';
 import { EVENTS_PER_CHUNK, EVENTS_PER_PAGE, MAJOR, MINOR } from './layout.ts';
@@ -25,7 +25,7 @@ export function encodeHead(
 ): Uint8Array {
   return encodeMessagePack({
     version: [MAJOR, MINOR],
-    sample: sample as unknown as Packable,
+    sample: withoutUndefined(sample as unknown as PackableOrUndefined),
     channels,
     roles: ROLES,
     kinds: KINDS,

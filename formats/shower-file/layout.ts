@@ -22,7 +22,7 @@ export const EVENTS_PER_CHUNK = 64;
 /** Events of every index page but the last. */
 export const EVENTS_PER_PAGE = 1024;
 /** Index pages of every directory page; the last is filled up with zeros, so that all are equally long. */
-export const PAGES_PER_DIRECTORY = 512;
+export const PAGES_PER_DIRECTORY = 128;
 
 /** Payload of the foot: an array of an unsigned 64-bit and an unsigned 32-bit integer. */
 export const FOOT_PAYLOAD_BYTES = 15;
