@@ -9,8 +9,8 @@ export interface Thrust {
 /** Up to this many momenta all sign patterns are tried: 2^(n-1) sums cost less than the sweeps do. */
 const MOST_FOR_ALL_SIGNS = 11;
 
-/** Shell sort's steps. Source: Ciura, Lect. Notes Comput. Sci. 2138 (2001) 106. */
-const GAPS = [57, 23, 10, 4, 1];
+/** Shell sort's steps before the last. Source: Ciura, Lect. Notes Comput. Sci. 2138 (2001) 106. */
+const GAPS = [132, 57, 23, 10, 4];
 
 // scratch, not reentrant
 let x = new Float64Array(64);
@@ -140,38 +140,45 @@ function turnAbout(i: number, n: number): void {
     order[crossings++] = k;
   }
   sortByKey(crossings);
-  keepBoth(sx, sy, sz, tx, ty, tz);
-  for (let c = 0; c < crossings; c++) {
+  // |s +- t|^2 = |s|^2 +- 2 s.t + |t|^2: the sum itself only where it beats the best
+  const t2 = tx * tx + ty * ty + tz * tz;
+  let longest2 = best[3];
+  for (let c = 0; ; c++) {
+    const st = sx * tx + sy * ty + sz * tz;
+    const length2 = sx * sx + sy * sy + sz * sz + 2 * Math.abs(st) + t2;
+    if (length2 > longest2) {
+      const side = st < 0 ? -1 : 1;
+      keepLonger(sx + side * tx, sy + side * ty, sz + side * tz);
+      longest2 = length2;
+    }
+    if (c === crossings) break;
     const k = order[c];
     const twice = 2 * sign[k];
     sx -= twice * x[k];
     sy -= twice * y[k];
     sz -= twice * z[k];
-    keepBoth(sx, sy, sz, tx, ty, tz);
   }
 }
 
-/** The longer of s + t and s - t; six numbers because it runs in the inner loop. */
-function keepBoth(sx: number, sy: number, sz: number, tx: number, ty: number, tz: number): void {
-  if (sx * tx + sy * ty + sz * tz < 0) keepLonger(sx - tx, sy - ty, sz - tz);
-  else keepLonger(sx + tx, sy + ty, sz + tz);
+/** Sort the first n keys upwards, their owners with them. Up to 64 plain insertion is a quarter faster than Shell's steps. */
+function sortByKey(n: number): void {
+  if (n > 64) for (const gap of GAPS) sortWithGap(n, gap);
+  sortWithGap(n, 1);
 }
 
-/** Sort the first n keys upwards, their owners with them: short lists, no allocation. */
-function sortByKey(n: number): void {
-  for (const step of GAPS)
-    for (let c = step; c < n; c++) {
-      const k = key[c];
-      const owner = order[c];
-      let at = c;
-      while (at >= step && key[at - step] > k) {
-        key[at] = key[at - step];
-        order[at] = order[at - step];
-        at -= step;
-      }
-      key[at] = k;
-      order[at] = owner;
+function sortWithGap(n: number, gap: number): void {
+  for (let c = gap; c < n; c++) {
+    const k = key[c];
+    const owner = order[c];
+    let at = c;
+    while (at >= gap && key[at - gap] > k) {
+      key[at] = key[at - gap];
+      order[at] = order[at - gap];
+      at -= gap;
     }
+    key[at] = k;
+    order[at] = owner;
+  }
 }
 
 /**
