@@ -82,7 +82,7 @@ describe('view FILE', () => {
     writeFileSync(at('short.shower'), readFileSync(at('a.shower')).subarray(0, 20_000));
     const { status, stderr, stdout } = await branchlight(['view', 'short.shower'], { cwd });
     expect([status, stdout]).toEqual([3, '']);
-    expect(stderr).toMatch(/short\.shower.*byte \d+/);
+    expect(stderr).toMatch(/short\.shower.*byte \d+.*branchlight convert/);
   });
 });
 

@@ -84,12 +84,12 @@ const isCode = (code: unknown): code is Code => typeof code === 'string' && Obje
  * The errors of the layers below carry codes of the same list (`ShowerFileError`, `SettingError`); whatever carries none
  * is a fault of ours.
  */
-export function explain(thrown: unknown): { readonly message: string; readonly status: number } {
+export function explain(thrown: unknown): { message: string; code: Code; status: number } {
   const { message, code } = (thrown instanceof Error ? thrown : new Error(String(thrown))) as Error & {
     readonly code?: unknown;
   };
   const known = isCode(code) ? code : 'internal';
-  return { message: `${message} (${known})`, status: CODES[known].status };
+  return { message, code: known, status: CODES[known].status };
 }
 
 const WORDS: Readonly<Record<string, string>> = {

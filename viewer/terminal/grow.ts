@@ -6,7 +6,7 @@ import {
   HistoryBatch,
   resolveSettings,
 } from '../../engine/index.ts';
-import { ShowerFileWriter } from '../../formats/index.ts';
+import { EVENTS_PER_CHUNK, ShowerFileWriter } from '../../formats/index.ts';
 import { defineCommand } from './command.ts';
 import { DONE, INTERRUPTED } from './errors.ts';
 import { onInterruption } from './interruption.ts';
@@ -15,8 +15,6 @@ import { openOutput } from './output.ts';
 import { byteSize, duration, grouped, startProgress } from './progress.ts';
 import { note } from './streams.ts';
 
-/** Between two looks at the clock and for interruptions; a few milliseconds of work. */
-const EVENTS_PER_TURN = 64;
 const QUARKS = ['d', 'u', 's', 'c', 'b'] as const;
 const MOST = Number.MAX_SAFE_INTEGER;
 
@@ -108,9 +106,10 @@ export const grow = defineCommand({
     const progress = startProgress(events, 'events', quiet);
     let done = 0;
     let steps = 0;
+    // A chunk of the file at a time: what is not yet written is what an interruption would lose.
     while (done < events && !interrupted) {
       batch.clear();
-      const until = Math.min(done + EVENTS_PER_TURN, events);
+      const until = Math.min(done + EVENTS_PER_CHUNK, events);
       for (; done < until; done++) grower.grow(batch, done);
       steps += batch.steps.length;
       await writer.append(batch);

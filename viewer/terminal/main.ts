@@ -17,12 +17,14 @@ export async function run(words: readonly string[], place: Place): Promise<numbe
   endWithReader();
   watchInterruptions();
   const [first, ...rest] = words;
-  const said = COMMANDS.some(({ name }) => name === first) ? ` ${first}` : '';
   try {
     return await dispatch(first, rest, place);
   } catch (error) {
-    const { message, status } = explain(error);
-    process.stderr.write(`branchlight${said}: ${message}\n`);
+    const { message, code, status } = explain(error);
+    const command = COMMANDS.find(({ name }) => name === first)?.name;
+    const mends = command !== 'convert' && (code === 'truncated-file' || code === 'wrong-checksum');
+    const hint = mends ? '; `branchlight convert` saves what is whole' : '';
+    process.stderr.write(`branchlight${command ? ` ${command}` : ''}: ${message}${hint} (${code})\n`);
     return status;
   }
 }

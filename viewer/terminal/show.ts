@@ -1,4 +1,4 @@
-import { historyToJson, ShowerFileReader } from '../../formats/index.ts';
+import { historyToJson, jsonText, ShowerFileReader } from '../../formats/index.ts';
 import { defineCommand } from './command.ts';
 import { DONE } from './errors.ts';
 import { EVENT_RANGE, readEventRange, withinFile } from './event-range.ts';
@@ -30,7 +30,7 @@ export const show = defineCommand({
     }
     for (let n = first; n <= last; n++) {
       const history = await reader.event(n);
-      await print(values.json ? `${JSON.stringify(historyToJson(history))}\n` : `\n${eventText(history)}`);
+      await print(values.json ? `${jsonText(historyToJson(history))}\n` : `\n${eventText(history)}`);
     }
     await source.close();
     return DONE;
