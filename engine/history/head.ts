@@ -54,6 +54,8 @@ export interface Head {
   readonly beams: readonly Beam[];
   readonly sqrtS: number;
   readonly weight: number;
+  /** How often the event was begun again because its jets were too heavy; absent where a shower never does that. */
+  readonly regrown?: number;
   /** The largest t at which the first step can happen [unit of t]. */
   readonly hardScale: number;
   /** kT^2 resolution [GeV^2]. */
@@ -78,7 +80,7 @@ export interface Head {
 /** The fields of a head that every event of a file has in common. */
 export type SampleHead = Omit<
   Head,
-  'event' | 'label' | 'stream' | 'rerun' | 'status' | 'statusReason' | 'process' | 'weight'
+  'event' | 'label' | 'stream' | 'rerun' | 'status' | 'statusReason' | 'process' | 'weight' | 'regrown'
 > & { readonly process: Omit<Process, 'outgoing'> };
 
 /** The fields of a head that differ between the events of a file. */
@@ -92,6 +94,8 @@ export interface EventHead {
   /** PDG numbers of the partons of the hard process. */
   readonly outgoing: readonly number[];
   readonly weight: number;
+  /** See Head. */
+  readonly regrown?: number;
 }
 
 /** Head of one event from what the file and the event say. */

@@ -79,7 +79,7 @@ export const TRIAL_COLUMNS = [
   column('emitter', 'row', '', 'entry that would have branched'),
   column('partner', 'row', '', 'its colour-dipole partner'),
   column('reason', 'word', '', 'why it was rejected'),
-  column('ratio', 'float', '', 'rate over overestimate, NaN where phase space forbids it'),
+  column('ratio', 'float', '', 'rate over overestimate, NaN outside phase space and below the cutoff'),
 ] as const;
 
 export const ROLES = [

@@ -48,6 +48,8 @@ export interface MassiveBranching {
   sij: number;
   z: number;
   azimuth: number;
+  /** Written by the map: transverse momentum of j to the plane of pt_ij and pt_k [GeV]. */
+  kT: number;
 }
 
 /**
@@ -97,6 +99,8 @@ export function mapMassiveDipole(
   const kT2 =
     mk2 === 0 ? z * (1 - z) * sij - (1 - z) * mi2 - z * mj2 : a * a * sij + b * b * mk2 + 2 * a * b * s - mi2;
   if (!(kT2 >= -1e-12 * total2)) return false;
+
+  branching.kT = Math.sqrt(Math.max(kT2, 0));
 
   // light-like vectors of the plane: l = p - c q, m = q - d p
   const root = Math.sqrt(kallen(total2, mij2, mk2));
@@ -154,7 +158,7 @@ export function mapMassiveDipole(
   ny += per * (mr * ly + lr * my);
   nz += per * (mr * lz + lr * mz);
   sinCos(turn, azimuth);
-  const scale = Math.sqrt(Math.max(kT2, 0) / length);
+  const scale = branching.kT / Math.sqrt(length);
   const c = scale * turn[1];
   const w = scale * turn[0] * per;
 

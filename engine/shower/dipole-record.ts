@@ -76,7 +76,8 @@ export function recordStep(
   steps.z[at] = z;
   steps.azimuth[at] = branching.azimuth;
   steps.y[at] = y;
-  steps.kT[at] = branching.kT;
+  // beside a heavy partner the evolution variable is no transverse momentum: the true one is claimed
+  steps.kT[at] = Number.isNaN(state.massiveKT) ? branching.kT : state.massiveKT;
   steps.openingAngle[at] = claimedAngle(state, emitter, j, twicePiPj);
   steps.alphaS[at] = branching.alphaS;
   steps.emitter[at] = emitterRow;

@@ -42,6 +42,8 @@ export class DipoleState {
   /** Dipoles whose q2 the last branching changed. */
   readonly touched = new Int32Array(4);
   touchedCount = 0;
+  /** Transverse momentum of the last branching [GeV] where a mass entered, NaN elsewhere: kT is then the shower's own. */
+  massiveKT = NaN;
   private readonly massive: MassiveBranching = {
     mij2: 0,
     mk2: 0,
@@ -51,6 +53,7 @@ export class DipoleState {
     sij: 0,
     z: 0,
     azimuth: 0,
+    kT: 0,
   };
   private nextTag = FIRST_TAG;
 
@@ -109,6 +112,7 @@ export class DipoleState {
     const massive = this.mass[emitter] > 0 || this.mass[partner] > 0 || quarkMass > 0;
     // 2 (pi.pj + pi.pk + pj.pk): what y and z are shares of
     const q2 = this.q2[dipole] - (flavour === 0 ? 0 : 2 * quarkMass * quarkMass);
+    this.massiveKT = NaN;
     if (massive) this.mapMassive(emitter, partner, this.q2[dipole], y * q2, quarkMass, z, azimuth);
     else mapDipole(this.after, this.momenta, 4 * emitter, 4 * partner, q2, z, w, y, azimuth);
     const j = this.newSlot(flavour === 0 ? 21 : -flavour, this.generation[emitter] + 1, quarkMass);
@@ -155,6 +159,7 @@ export class DipoleState {
     massive.azimuth = azimuth;
     if (!mapMassiveDipole(this.after, this.momenta, 4 * emitter, 4 * partner, massive))
       throw new RangeError(`branching at z ${z}, s_ij ${massive.sij} GeV^2: outside its phase space`);
+    this.massiveKT = massive.kT;
   }
 
   private measureQ2(a: number, b: number): number {

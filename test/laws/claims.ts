@@ -1,4 +1,4 @@
-import { type History, measureSteps, type StepMeasures } from '../../engine/index.ts';
+import { type History, measureSteps } from '../../engine/index.ts';
 
 /** The largest differences between what was claimed and what the rows show. */
 export interface WorstClaims {
@@ -26,28 +26,12 @@ export const noClaims = (): WorstClaims => ({
 
 const worse = (a: number, b: number): number => (Number.isNaN(a) || b <= a ? a : b);
 
-/**
- * The kT that a shower claims. The one about the dipole axis, but where the partner has a mass the definition
- * kT^2 = z(1-z) s_ij - (1-z) m_i^2 - z m_j^2 of the evolution variable, which is larger.
- *
- * Source: Catani, Dittmaier, Seymour, Trocsanyi, Nucl. Phys. B627 (2002) 189, section 5.
- */
-function claimedKT({ entries, steps }: History, measured: StepMeasures, step: number): number {
-  if (entries.m[steps.partner[step]] === 0) return measured.kT[step];
-  const z = measured.zLightCone[step];
-  const mi = entries.m[steps.i[step]];
-  const mj = entries.m[steps.j[step]];
-  return Math.sqrt(z * (1 - z) * measured.virtuality[step] ** 2 - (1 - z) * mi * mi - z * mj * mj);
-}
-
 /** Hold an event's claims against its rows: relative differences (z: absolute; azimuth: on the circle), NaN is kept. */
 export function compareClaims(worst: WorstClaims, history: History): void {
   const { steps } = history;
   const measured = measureSteps(history);
   for (let step = 0; step < steps.length; step++) {
-    const kT = claimedKT(history, measured, step);
-    worst.kT = worse(worst.kT, Math.abs(kT / steps.kT[step] - 1));
-    for (const name of ['y', 'openingAngle', 't'] as const)
+    for (const name of ['y', 'kT', 'openingAngle', 't'] as const)
       worst[name] = worse(worst[name], Math.abs(measured[name][step] / steps[name][step] - 1));
     worst.z = worse(worst.z, Math.abs(measured.zLightCone[step] - steps.z[step]));
     const apart = Math.abs(measured.azimuth[step] - steps.azimuth[step]);

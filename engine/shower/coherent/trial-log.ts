@@ -33,8 +33,12 @@ export class TrialLog implements LineListener {
     this.ratio[at] = ratio;
   }
 
-  /** Write them behind the batch's trials. The rows of the nodes are known. */
-  write(batch: HistoryBatch, tree: BranchingTree, order: PlaybackOrder): void {
+  /**
+   * Write them behind the batch's trials. The rows of the nodes are known.
+   *
+   * @param keep trials before this step or an earlier one are left out.
+   */
+  write(batch: HistoryBatch, tree: BranchingTree, order: PlaybackOrder, keep: number): void {
     if (batch.trials === null) return;
     batch.reserve(0, 0, this.count);
     const { trials } = batch;
@@ -44,10 +48,16 @@ export class TrialLog implements LineListener {
     };
     // counting sort by `before`
     const next = new Int32Array(order.count + 2);
-    for (let trial = 0; trial < this.count; trial++) next[before(trial) + 1]++;
+    let written = 0;
+    for (let trial = 0; trial < this.count; trial++) {
+      if (before(trial) <= keep) continue;
+      next[before(trial) + 1]++;
+      written++;
+    }
     for (let step = 0; step <= order.count; step++) next[step + 1] += next[step];
     for (let trial = 0; trial < this.count; trial++) {
       const step = before(trial);
+      if (step <= keep) continue;
       const at = trials.length + next[step]++;
       trials.before[at] = step;
       trials.t[at] = this.t[trial];
@@ -59,7 +69,7 @@ export class TrialLog implements LineListener {
       trials.reason[at] = this.reason[trial];
       trials.ratio[at] = this.ratio[trial];
     }
-    trials.length += this.count;
+    trials.length += written;
   }
 
   private grow(): void {
