@@ -2,7 +2,7 @@ import type { ChildProcess } from 'node:child_process';
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { branchlight, type Ended, ended, scratchFolder, shell, start } from './run-command.ts';
+import { branchlight, type Ended, ended, scratchFolder, start } from './run-command.ts';
 
 const folder = scratchFolder();
 const cwd = folder.path;
@@ -108,13 +108,17 @@ test('view --port takes that port, and refuses it with 2 while it is taken', asy
 });
 
 test('view - serves what arrives on standard input', async () => {
-  const line = [
-    'branchlight grow --events 20 --quiet --out - | branchlight view - --quiet > address & job=$!',
-    'for n in $(seq 100); do [ -s address ] && break; sleep 0.1; done',
-    'node -e \'fetch(process.argv[1] + "sample.shower").then((r) => r.arrayBuffer()).then((b) => console.log(b.byteLength))\' "$(cat address)"',
-    'kill $job; wait $job; branchlight grow --events 20 --quiet --out - | wc -c',
-  ].join('\n');
-  const { stdout } = await shell(line, cwd);
-  const [served, grown] = stdout.trim().split('\n').map(Number);
-  expect(served).toBe(grown);
+  const { bytes } = await branchlight(['grow', '--events', '20', '--out', '-'], { cwd });
+  const child = start(['view', '-', '--quiet'], cwd);
+  const end = ended(child);
+  child.stdin?.end(bytes);
+  const address = await new Promise<string>((resolve) => {
+    child.stdout?.once('data', (piece: Buffer) => resolve(piece.toString().trim()));
+  });
+  const served = await (await fetch(`${address}sample.shower`)).arrayBuffer();
+  expect(Buffer.from(served).equals(bytes)).toBe(true);
+  const { file } = await (await fetch(`${address}session.json`)).json();
+  expect(file).toEqual({ name: 'standard input', address: 'sample.shower', size: bytes.length });
+  child.kill('SIGINT');
+  await end;
 });

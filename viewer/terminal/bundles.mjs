@@ -17,6 +17,9 @@ const onlyDependencies = (root) => ({
   },
 });
 
+// A slow machine is no fault of the sources.
+const checks = { pluginTimings: false };
+
 const common = (root) => ({
   root,
   configFile: false,
@@ -39,6 +42,7 @@ export const pageBundle = (root, outDir) => ({
     assetsInlineLimit: 0,
     modulePreload: { polyfill: false },
     reportCompressedSize: false,
+    rolldownOptions: { checks },
     // three alone is above the default of 500 kB.
     chunkSizeWarningLimit: 1500,
   },
@@ -57,6 +61,9 @@ export const terminalBundle = (root, outDir) => ({
     emptyOutDir: true,
     target: 'node20',
     minify: false,
-    rolldownOptions: { output: { entryFileNames: '[name].mjs', chunkFileNames: '[name]-[hash].mjs' } },
+    rolldownOptions: {
+      checks,
+      output: { entryFileNames: '[name].mjs', chunkFileNames: '[name]-[hash].mjs' },
+    },
   },
 });

@@ -1,14 +1,18 @@
-/** Number of single letters to insert, leave out or change to turn `a` into `b`. */
+/** Number of single letters to insert, leave out, change or swap with their neighbour to turn `a` into `b`. */
 function distance(a: string, b: string): number {
-  let row = Array.from({ length: b.length + 1 }, (_, j) => j);
+  const rows = [Array.from({ length: b.length + 1 }, (_, j) => j)];
   for (let i = 1; i <= a.length; i++) {
-    const next = [i];
+    const row = [i];
     for (let j = 1; j <= b.length; j++) {
-      next.push(Math.min(row[j] + 1, next[j - 1] + 1, row[j - 1] + (a[i - 1] === b[j - 1] ? 0 : 1)));
+      const change = rows[i - 1][j - 1] + (a[i - 1] === b[j - 1] ? 0 : 1);
+      row.push(Math.min(rows[i - 1][j] + 1, row[j - 1] + 1, change));
+      if (i > 1 && j > 1 && a[i - 1] === b[j - 2] && a[i - 2] === b[j - 1]) {
+        row[j] = Math.min(row[j], rows[i - 2][j - 2] + 1);
+      }
     }
-    row = next;
+    rows.push(row);
   }
-  return row[b.length];
+  return rows[a.length][b.length];
 }
 
 /** The name that `text` was probably meant to be, null where none is close. */
