@@ -12,7 +12,7 @@ const COUPLINGS: CouplingKind[] = [
 describe.each(['kt', 'virtuality'] as const)('every step of large samples in %s ordering', (order) => {
   it.each(COUPLINGS)('has uniform u_t, u_z, u_phi and u_channel at 91 GeV, coupling $kind', (coupling) => {
     const settings = { energy: 91.1876, order, coupling, cutoff: 1, flavours: 5, quark: 1 } as const;
-    const verdict = judgeEverySteps(settings, 302, 15000, 400);
+    const verdict = judgeEverySteps(settings, 302, 10000, 150);
     for (const [name, p] of verdict) expect(p, name).toBeGreaterThan(1e-4);
   });
 

@@ -6,7 +6,7 @@ describe('the sample means of large samples', () => {
   it.each(SAMPLES)(
     'agree with an independent shower: $name',
     ({ settings }) => {
-      const events = settings.energy > 500 ? 60_000 : 300_000;
+      const events = settings.energy > 500 ? 30_000 : 150_000;
       for (const { key, pull } of compareMeans(settings, 602, events)) {
         if (!Number.isNaN(pull)) expect(Math.abs(pull), key).toBeLessThan(4);
       }
