@@ -17,6 +17,19 @@ export function ballEvent(history: History): BallEvent {
   return { history, strands, lines: traceStrands(strands), chains: traceChains(history, strands) };
 }
 
+/** How finely an event's turns are traced at a zoom: in doublings, so that a wheel does not trace them anew at every notch. */
+export function finenessAt(zoom: number): number {
+  let fineness = 1;
+  while (fineness < zoom && fineness < 32) fineness *= 2;
+  return fineness;
+}
+
+/** The same event with its lines traced for an enlargement. */
+export const retrace = (event: BallEvent, fineness: number): BallEvent => ({
+  ...event,
+  lines: traceStrands(event.strands, fineness),
+});
+
 /** What the clock says about an event at evolution time L. */
 export interface Moment {
   /** Last step that has happened, −1 for none. */

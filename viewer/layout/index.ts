@@ -1,4 +1,4 @@
-export { type BallEvent, ballEvent, type Moment, momentOf } from './ball-event.ts';
+export { type BallEvent, ballEvent, finenessAt, type Moment, momentOf, retrace } from './ball-event.ts';
 export {
   type Camera,
   clampCamera,
@@ -28,7 +28,7 @@ export {
   stepTimes,
   timeAtRadius,
 } from './radius-scale.ts';
-export { type Shell, scaleText, shells } from './shells.ts';
+export { type Shell, scaleText, shells, threeDigits } from './shells.ts';
 export { type StrandLines, traceStrands } from './strand-lines.ts';
 export { layStrands, type Strands, strandDirection, type Turns } from './strands.ts';
 export { TURN_FRACTION, turnedBy, turnPoints } from './turn.ts';

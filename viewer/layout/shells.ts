@@ -45,10 +45,19 @@ function roundShells(scale: RadiusScale, hard: number, digits: readonly number[]
   return found;
 }
 
-/** A scale as a label prints it: three significant digits, no exponent between 0.001 and 99999 [GeV]. */
+/** A round scale as a label prints it [GeV]: at most three significant digits, no trailing zeros. */
 export function scaleText(value: number): string {
-  if (!(value > 0 && value < Infinity)) return '—';
-  const digits = Math.floor(log(value) / log(10) + 1e-9);
-  if (digits < -3 || digits > 4) return value.toExponential(2).replace('e', '·10^').replace('+', '');
-  return String(Number(value.toPrecision(3)));
+  const text = threeDigits(value);
+  return text.includes('.') ? text.replace(/\.?0+(?=$|·)/, '') : text;
+}
+
+/** A positive number to three significant digits, zeros kept: 0.470, 12.0, 1200, `1.20·10^{−4}` (see `runs`). */
+export function threeDigits(value: number): string {
+  if (!(value > 0 && value < Infinity)) return value === 0 ? '0' : '—';
+  if (value >= 0.001 && value < 99_950) {
+    const text = value.toPrecision(3);
+    return text.includes('e') ? String(Number(text)) : text;
+  }
+  const [mantissa, exponent] = value.toExponential(2).split('e');
+  return `${mantissa}·10^{${exponent.replace('+', '').replace('-', '−')}}`;
 }

@@ -15,9 +15,10 @@ export interface StrandLines {
 /**
  * Trace all strands: turns as chords of a quarter ellipse, rays as one segment, a point wherever a new row begins.
  *
+ * @param fineness As in turnPoints.
  * Points lie on their exact curve, so that a segment's ends have the strand's true direction at their radius.
  */
-export function traceStrands(strands: Strands): StrandLines {
+export function traceStrands(strands: Strands, fineness = 1): StrandLines {
   const count = strands.from.length;
   const start = new Int32Array(count + 1);
   const position: number[] = [];
@@ -25,7 +26,7 @@ export function traceStrands(strands: Strands): StrandLines {
   const row: number[] = [];
   const at = new Float64Array(3);
   for (let strand = 0; strand < count; strand++) {
-    for (const [turn, r, turned] of strandPoints(strands, strand)) {
+    for (const [turn, r, turned] of strandPoints(strands, strand, fineness)) {
       onCircle(at, 0, strands.turns.direction, 3 * turn, strands.turns.tangent, 3 * turn, turned);
       position.push(r * at[0], r * at[1], r * at[2]);
       radius.push(r);
@@ -43,7 +44,7 @@ export function traceStrands(strands: Strands): StrandLines {
 
 type Point = readonly [turn: number, radius: number, turned: number];
 
-function strandPoints(strands: Strands, strand: number): Point[] {
+function strandPoints(strands: Strands, strand: number, fineness: number): Point[] {
   const { turnStart, turns } = strands;
   const points: Point[] = [];
   for (let turn = turnStart[strand]; turn < turnStart[strand + 1]; turn++) {
@@ -51,7 +52,7 @@ function strandPoints(strands: Strands, strand: number): Point[] {
     const end = turn + 1 < turnStart[strand + 1] ? turns.radius[turn + 1] : strands.to[strand];
     const angle = turns.angle[turn];
     const height = turns.height[turn];
-    const curve = turnPoints(angle, height);
+    const curve = turnPoints(angle, height, begin, fineness);
     const own: Point[] = [];
     for (let k = 0; k < curve.length && (height <= 0 || begin + curve[k] < end); k += 2) {
       own.push([turn, begin + curve[k], curve[k + 1]]);

@@ -21,13 +21,21 @@ export function turnedBy(angle: number, rise: number, height: number): number {
 }
 
 /**
- * Points of a turn, ends included, for drawing it as a polyline: a point every seventh of a radian or closer, at least five.
+ * Points of a turn, ends included, for drawing it as a polyline: so many that no chord is farther than about a thousandth of
+ * the rim's radius from the curve, but at most twenty chords; both are divided by `fineness`.
  *
+ * @param radius Radius at which it begins, in units of the rim's.
+ * @param fineness 1 for the whole ball, more for a part of it that is enlarged.
  * @returns Pairs: rise, angle turned so far [rad].
  */
-export function turnPoints(angle: number, height: number): number[] {
+export function turnPoints(angle: number, height: number, radius: number, fineness = 1): number[] {
   if (angle < 1e-4) return [0, 0, height, angle];
-  const pieces = Math.min(4 + Math.ceil(angle / 0.14), 24);
+  // A chord over u of an ellipse lies at most axis u^2 / 8 from it.
+  const axis = Math.max(angle * radius, Math.abs(height));
+  const pieces = Math.max(
+    2,
+    Math.min(20 * fineness, Math.ceil(QUARTER * Math.sqrt((axis * fineness) / 0.006))),
+  );
   const points: number[] = [];
   for (let k = 0; k <= pieces; k++) {
     const u = (QUARTER * k) / pieces;

@@ -1,5 +1,4 @@
 export {
-  angleText,
   arrowRadii,
   type BallView,
   ballDrawing,
@@ -8,6 +7,7 @@ export {
   endsOf,
   type KeyFold,
   keyPitch,
+  keysFit,
   type LabelOptions,
   type Lettering,
   letter,
@@ -26,9 +26,14 @@ export {
   rowAt,
   SAME_RADIUS,
   SHELL_GAP,
+  selectionMarks,
+  stepName,
+  TIP_LENGTH,
   turnPath,
   washShares,
 } from './ball/index.ts';
+export { type Canvas2d, drawingFonts, paintDrawing } from './canvas.ts';
+export { LIMB } from './display-list.ts';
 export type {
   ArcText,
   Circle,

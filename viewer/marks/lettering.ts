@@ -34,23 +34,26 @@ export const SCRIPT = { size: 0.74, sub: 0.22, sup: 0.36 } as const;
 export const plain = (text: string, bold = false): Run[] => [{ text, face: bold ? 'sansBold' : 'sans' }];
 
 /**
- * Runs of a text in which `_` lowers and `^` raises what follows in braces (or the next character), and `*…*` sets a symbol:
- * `*k*_T = 2.87 GeV`, `√*t*`, `10^{−2}`.
+ * Runs of a short mathematical text: `*k*_{T}` is an italic k with an upright T lowered, `10^{−14}` a raised exponent.
+ *
+ * Stars enclose symbols, also inside of `_{…}` and `^{…}`, which do not nest. A lone star, `_` or `^` stands for itself.
  */
 export function runs(source: string, bold = false): Run[] {
   const found: Run[] = [];
-  const pattern = /\*([^*]+)\*|([_^])(?:\{([^}]*)\}|(.))|([^*_^]+)/gu;
-  for (const [, symbol, script, braced, single, text] of source.matchAll(pattern)) {
-    if (symbol !== undefined) found.push({ text: symbol, face: bold ? 'symbolBold' : 'symbol' });
-    else if (script !== undefined) {
-      found.push({
-        text: braced ?? single,
-        face: bold ? 'sansBold' : 'sans',
-        place: script === '_' ? 'sub' : 'sup',
-      });
-    } else found.push({ text, face: bold ? 'sansBold' : 'sans' });
+  const cut = /([_^])\{([^}]*)\}|([^_^]+|[_^])/g;
+  for (const [, mark, shifted, line] of source.matchAll(cut)) {
+    if (mark) addSymbols(found, shifted, bold, mark === '_' ? 'sub' : 'sup');
+    else addSymbols(found, line, bold, undefined);
   }
   return found;
+}
+
+function addSymbols(found: Run[], source: string, bold: boolean, place: Run['place']): void {
+  source.split(/\*([^*]+)\*/).forEach((text, k) => {
+    if (!text) return;
+    const face = k % 2 === 1 ? (bold ? 'symbolBold' : 'symbol') : bold ? 'sansBold' : 'sans';
+    found.push(place ? { text, face, place } : { text, face });
+  });
 }
 
 /** The text of runs without its setting. */

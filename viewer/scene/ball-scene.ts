@@ -1,6 +1,6 @@
 import {
-  BufferAttribute,
-  BufferGeometry,
+  type BufferGeometry,
+  DoubleSide,
   Camera as GraphicsCamera,
   GLSL3,
   Matrix3,
@@ -27,16 +27,23 @@ import { chainQuads } from './build/chain-quads.ts';
 import { coneGlyphs } from './build/cone-glyphs.ts';
 import { coneQuads } from './build/cone-quads.ts';
 import { eventGlyphs, glyphQuads } from './build/glyph-quads.ts';
-import { netQuads, shellQuads } from './build/net-quads.ts';
+import { netQuads, outlineQuads, shellQuads } from './build/circle-quads.ts';
+import type { Quads } from './build/quads.ts';
 import { type LineQuads, lineQuads, measureAlong, strandQuads } from './build/strand-quads.ts';
 import { meshOf, refill } from './mesh.ts';
 import { CHAIN_FRAGMENT, CHAIN_VERTEX } from './shaders/chain-shader.ts';
 import { GLYPH_FRAGMENT, GLYPH_VERTEX } from './shaders/glyph-shader.ts';
-import { GROUND_FRAGMENT, GROUND_VERTEX, MOST_SHELLS } from './shaders/ground-shader.ts';
+import { GROUND_FRAGMENT, SCREEN_VERTEX, WASH_FRAGMENT } from './shaders/ground-shader.ts';
 import { LINE_FRAGMENT, LINE_VERTEX } from './shaders/line-shader.ts';
 import { SceneError } from './webgl.ts';
 
 const NO_LINES: LineQuads = lineQuads([]);
+// One triangle that covers the canvas.
+const SCREEN: Quads = {
+  columns: { aCorner: { size: 2, values: new Float32Array([-1, -1, 3, -1, -1, 3]) } },
+  index: new Uint32Array([0, 1, 2]),
+};
+const IN_PAPER = [1, 0, 0, 0, 1, 0, 0, 0, 1];
 
 /** Objects and memory of a scene on the graphics processor. */
 export interface SceneMemory {
@@ -57,7 +64,8 @@ export class BallScene {
   readonly #scene = new Scene();
   readonly #eye = new GraphicsCamera();
   readonly #materials: RawShaderMaterial[] = [];
-  readonly #ground: Mesh<BufferGeometry, RawShaderMaterial>;
+  readonly #shells: Mesh<BufferGeometry, RawShaderMaterial>;
+  readonly #wash: Mesh<BufferGeometry, RawShaderMaterial>;
   readonly #strands: Mesh<BufferGeometry, RawShaderMaterial>;
   readonly #chains: Mesh<BufferGeometry, RawShaderMaterial>;
   readonly #glyphs: Mesh<BufferGeometry, RawShaderMaterial>;
@@ -69,6 +77,7 @@ export class BallScene {
   #camera: Camera | null = null;
   #stage: Stage | null = null;
   #palette: Palette = palettes.light;
+  #shellKey = '-';
   #disposed = false;
 
   /**
@@ -90,22 +99,29 @@ export class BallScene {
     this.#renderer.info.autoReset = true;
     const lines = this.#material(LINE_VERTEX, LINE_FRAGMENT, true);
     const flat = this.#material(LINE_VERTEX, LINE_FRAGMENT, false);
+    // Circles about the middle lie in the plane of the paper from wherever one looks.
     const outline = this.#material(LINE_VERTEX, LINE_FRAGMENT, true);
-    outline.uniforms = { ...outline.uniforms, uView: { value: new Matrix3() } };
+    const circles = this.#material(LINE_VERTEX, LINE_FRAGMENT, false);
+    for (const material of [outline, circles]) {
+      material.uniforms = { ...material.uniforms, uView: { value: new Matrix3() } };
+    }
     const glyphs = this.#material(GLYPH_VERTEX, GLYPH_FRAGMENT, true);
-    this.#ground = new Mesh(screenTriangle(), this.#material(GROUND_VERTEX, GROUND_FRAGMENT, false));
-    this.#ground.frustumCulled = false;
-    this.#strands = meshOf(NO_LINES, lines, 2);
-    this.#coneLines = meshOf(NO_LINES, lines, 4);
-    this.#chains = meshOf(NO_LINES, this.#material(CHAIN_VERTEX, CHAIN_FRAGMENT, true), 5);
-    this.#glyphs = meshOf(NO_LINES, glyphs, 6);
-    this.#coneGlyphs = meshOf(NO_LINES, glyphs, 7);
+    this.#shells = meshOf(NO_LINES, circles, 1);
+    this.#wash = meshOf(SCREEN, this.#material(SCREEN_VERTEX, WASH_FRAGMENT, false), 2);
+    this.#wash.visible = false;
+    this.#strands = meshOf(NO_LINES, lines, 3);
+    this.#coneLines = meshOf(NO_LINES, lines, 5);
+    this.#chains = meshOf(NO_LINES, this.#material(CHAIN_VERTEX, CHAIN_FRAGMENT, true), 6);
+    this.#glyphs = meshOf(NO_LINES, glyphs, 7);
+    this.#coneGlyphs = meshOf(NO_LINES, glyphs, 8);
     this.#scene.matrixWorldAutoUpdate = false;
     this.#scene.add(
-      this.#ground,
+      meshOf(SCREEN, this.#material(SCREEN_VERTEX, GROUND_FRAGMENT, false), 0),
+      this.#shells,
       meshOf(netQuads(), flat, 1),
+      this.#wash,
       this.#strands,
-      meshOf(shellQuads(), outline, 3),
+      meshOf(outlineQuads(), outline, 4),
       this.#coneLines,
       this.#chains,
       this.#glyphs,
@@ -117,6 +133,7 @@ export class BallScene {
   #material(vertexShader: string, fragmentShader: string, depth: boolean): RawShaderMaterial {
     const material = new RawShaderMaterial({
       glslVersion: GLSL3,
+      side: DoubleSide,
       vertexShader,
       fragmentShader,
       transparent: true,
@@ -210,21 +227,26 @@ export class BallScene {
     if (measureAlong(this.#strandQuads, projection.rotation, projection.scale)) {
       this.#strands.geometry.attributes.aAlong.needsUpdate = true;
     }
-    if (this.#event) {
-      const found = shells(this.#event.strands.scale, SHELL_GAP / projection.scale);
-      const radii = [this.#event.strands.scale.inner, ...found.map(({ radius }) => radius)].slice(
-        0,
-        MOST_SHELLS,
-      );
-      uniforms.uShells.value.set(radii);
-      uniforms.uShellCount.value = radii.length;
-    } else uniforms.uShellCount.value = 0;
+    this.#writeShells(projection);
     this.#writeCone(projection);
+  }
+
+  // The gaps of the dots are measured in pixels, so another zoom means other dots.
+  #writeShells({ scale }: Projection): void {
+    const radii = this.#event?.strands.scale;
+    const key = radii ? `${this.#event?.strands.scale.end} ${scale}` : '';
+    if (key === this.#shellKey) return;
+    this.#shellKey = key;
+    const found = radii ? shells(radii, SHELL_GAP / scale).map(({ radius }) => radius) : [];
+    const quads = shellQuads(radii ? [radii.inner, ...found] : []);
+    measureAlong(quads, IN_PAPER, scale);
+    refill(this.#shells, quads);
   }
 
   #writeCone(projection: Projection | null = this.#projection()): void {
     const uniforms = this.#uniforms;
     uniforms.uCapShare.value.set(0, 0);
+    this.#wash.visible = false;
     if (!projection || !this.#stage || (!this.#cone && !this.#coneLines.visible)) return;
     const quads = coneQuads(this.#cone, projection, this.#stage.size);
     measureAlong(quads, projection.rotation, projection.scale);
@@ -238,6 +260,7 @@ export class BallScene {
     uniforms.uCapRadius.value = this.#cone.radius;
     for (const ring of this.#cone.rings) {
       if (ring.kind === 'birth' || ring.angle >= PI / 2) continue;
+      this.#wash.visible = true;
       const [x, y, z] = ring.axis;
       const r = projection.rotation;
       const at = ring.kind === 'opening' ? 0 : 1;
@@ -255,12 +278,4 @@ export class BallScene {
   #projection(): Projection | null {
     return this.#camera && this.#stage ? projectionOf(this.#camera, this.#stage) : null;
   }
-}
-
-// One triangle that covers the canvas.
-function screenTriangle(): BufferGeometry {
-  const geometry = new BufferGeometry();
-  geometry.setAttribute('aCorner', new BufferAttribute(new Float32Array([-1, -1, 3, -1, -1, 3]), 2));
-  geometry.setIndex([0, 1, 2]);
-  return geometry;
 }

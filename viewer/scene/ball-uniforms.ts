@@ -1,6 +1,5 @@
 import { Color, Matrix3, Vector2, Vector4 } from 'three';
 import { channels, litEdgeOf, type Palette } from '../marks/index.ts';
-import { MOST_SHELLS } from './shaders/ground-shader.ts';
 
 /** The values that all materials of the ball share; writing one here changes the next picture and rebuilds nothing. */
 export function ballUniforms() {
@@ -21,8 +20,6 @@ export function ballUniforms() {
     uRule: { value: new Color() },
     uWash: { value: new Color() },
     uTints: { value: [new Color(), new Color(), new Color(), new Color()] },
-    uShells: { value: new Float32Array(MOST_SHELLS) },
-    uShellCount: { value: 0 },
     uCaps: { value: [new Vector4(), new Vector4()] },
     uCapShare: { value: new Vector2() },
     uCapRadius: { value: 1 },

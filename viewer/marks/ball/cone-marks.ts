@@ -27,6 +27,9 @@ export const RING_DASH: Readonly<Record<Ring['kind'], readonly number[]>> = {
   birth: [8, 3.2, 1.4, 3.2],
 };
 
+/** Length of the arrowhead of the emitter's turn [px at size 1]. */
+export const TIP_LENGTH = 8;
+
 /** Width of a ring's line [px at size 1], and how far its far half is blended towards the paper. */
 export const RING = { opening: 1.7, partner: 1.4, birth: 1.3, behindFade: 0.58 } as const;
 
@@ -190,7 +193,7 @@ function turnLayers(plate: Plate, cone: Cone): Layer[] {
   const dx = end[2] - end[0];
   const dy = end[3] - end[1];
   const length = Math.sqrt(dx * dx + dy * dy) || 1;
-  const head = 8 * size;
+  const head = TIP_LENGTH * size;
   const [ux, uy] = [dx / length, dy / length];
   const tip = [end[2], end[3]];
   const width = 1.9 * size;
@@ -235,11 +238,14 @@ export function turnPath(cone: Cone, scale: number, size: number): Float64Array 
   const pixels = cone.radius * scale;
   if (angle * pixels < 26 * size) return new Float64Array(0);
   const from = (9.5 * size) / pixels;
-  const to = angle - (5.5 * size) / pixels;
-  const pieces = Math.max(6, Math.ceil((to - from) / 0.05));
-  const points = new Float64Array(3 * (pieces + 1));
-  for (let k = 0; k <= pieces; k++) {
-    onCircle(points, 3 * k, cone.emitter, 0, tangent, 0, from + ((to - from) * k) / pieces);
+  const tip = angle - (5.5 * size) / pixels;
+  // The last piece is the middle of the head, which the line need not reach through.
+  const to = tip - (TIP_LENGTH * 0.6 * size) / pixels;
+  const pieces = Math.max(6, Math.ceil((to - from) / 0.03));
+  const points = new Float64Array(3 * (pieces + 2));
+  for (let k = 0; k <= pieces + 1; k++) {
+    const at = k > pieces ? tip : from + ((to - from) * k) / pieces;
+    onCircle(points, 3 * k, cone.emitter, 0, tangent, 0, at);
     for (let n = 0; n < 3; n++) points[3 * k + n] *= cone.radius;
   }
   return points;

@@ -1,7 +1,8 @@
-import { rootScaleAt, scaleText } from '../../layout/index.ts';
+import { type Camera, rootScaleAt, type Stage, scaleText, threeDigits } from '../../layout/index.ts';
 import type { Mark, Text } from '../display-list.ts';
 import { plain, type Run, runs } from '../lettering.ts';
 import { LIT_EDGE, type PartonStyle, tintOf } from '../parton-style.ts';
+import { widthOf } from '../text-width.ts';
 import { mix } from '../tint.ts';
 import { triangle } from './arrow-marks.ts';
 import { letterSize } from './letter-size.ts';
@@ -14,7 +15,6 @@ export interface KeyFold {
   readonly right: boolean;
 }
 
-/** Names of the steps' numbers in texts count from 1, as the clock does. */
 const countOf = (count: number, word: string): string => `${count} ${word}${count === 1 ? '' : 's'}`;
 
 /** Texts in the two upper corners: what radius and direction mean, and where the clock stands. */
@@ -39,15 +39,15 @@ export function cornerMarks(plate: Plate): { still: Mark[]; clock: Mark[] } {
   return {
     still: [
       text(0, 0, plain('Ball', true), true),
-      text(0, 1, runs('radius *L* = ln(*t*_0/*t*)'), false),
+      text(0, 1, runs('radius *L* = ln(*t*_{0}/*t*)'), false),
       text(0, 2, runs('direction = momentum'), false),
-      text(0, 3, runs(`inner shell √*t*_0 = ${scaleText(rootScaleAt(scale, 0))} GeV`), false),
+      text(0, 3, runs(`inner shell √*t*_{0} = ${scaleText(rootScaleAt(scale, 0))} GeV`), false),
     ],
     clock: [
       text(right, 0, plain(momentText(plate), true), true),
-      text(right, 1, runs(`√*t* = ${scaleText(rootScaleAt(scale, plate.time))} GeV`), false),
+      text(right, 1, runs(`√*t* = ${threeDigits(rootScaleAt(scale, plate.time))} GeV`), false),
       text(right, 2, plain(countOf(moment.partons, 'parton')), false),
-      text(right, 3, plain(left === 0 ? 'no step to come' : `${countOf(left, 'step')} to come`), false),
+      text(right, 3, plain(comingText(left, moment.steps)), false),
     ],
   };
 }
@@ -55,7 +55,15 @@ export function cornerMarks(plate: Plate): { still: Mark[]; clock: Mark[] } {
 /** Where the clock stands, in words. */
 export function momentText({ moment }: Pick<Plate, 'moment'>): string {
   if (moment.steps === 0) return 'no branching in this event';
-  return moment.step < 0 ? 'hard process' : `after step ${moment.step + 1} of ${moment.steps}`;
+  return moment.step < 0 ? 'hard process' : `after step ${stepName(moment.step)}`;
+}
+
+/** A step as every view calls it: its row number in the file, from 0. */
+export const stepName = (step: number): string => String(step);
+
+function comingText(left: number, steps: number): string {
+  if (left === 0) return 'no step to come';
+  return `${left} of ${countOf(steps, 'step')} to come`;
 }
 
 const LEFT_KEY: readonly [string, string][] = [
@@ -76,21 +84,48 @@ const RIGHT_KEY: readonly [string, string][] = [
 /** Height of a line of the keys [px], and the room left under them. */
 export const keyPitch = (size: number): number => 1.52 * letterSize(size);
 
-/** Keys to the marks in the two lower corners. */
-export function keyMarks(plate: Plate, open: KeyFold): Mark[] {
+/**
+ * Which keys stand clear of the ball: a legend that covers it does more harm than good.
+ */
+export function keysFit(stage: Stage, camera: Camera): KeyFold {
+  const { x, y, scale } = { ...stage, scale: stage.radius * camera.zoom };
+  const pitch = keyPitch(stage.size);
+  const centreX = x + camera.panX * stage.radius;
+  const centreY = y + camera.panY * stage.radius;
+  const clear = (rows: readonly [string, string][], left: boolean): boolean =>
+    rows.every(([, words], k) => {
+      const width = KEY_SAMPLE + KEY_GAP + widthOf(plain(words), letterSize(stage.size));
+      const atX = left ? width : stage.width - width;
+      const atY = stage.height - KEY_FOOT - pitch * (rows.length - k);
+      const dx = left ? Math.max(0, centreX - atX) : Math.max(0, atX - centreX);
+      const dy = atY - centreY;
+      return dx * dx + dy * dy > scale * scale * KEY_OVERLAP * KEY_OVERLAP;
+    });
+  return { left: clear(LEFT_KEY, true), right: clear(RIGHT_KEY, false) };
+}
+
+// Length of a sample, its distance to the words, the room that folding needs [px], and how far into the ball, where nothing
+// of the event lies but the last turns, a line of words may reach.
+const KEY_SAMPLE = 42;
+const KEY_GAP = 12;
+const KEY_FOOT = 20;
+const KEY_OVERLAP = 0.93;
+
+/** Keys to the marks in the two lower corners. @param foot Room left under them [px]. */
+export function keyMarks(plate: Plate, open: KeyFold, foot: number): Mark[] {
   const { stage, palette } = plate;
   const size = letterSize(stage.size);
   const pitch = keyPitch(stage.size);
-  const sample = 42 * Math.min(1.05, stage.size);
+  const sample = KEY_SAMPLE;
   const marks: Mark[] = [];
   const column = (rows: readonly [string, string][], left: boolean): void => {
     rows.forEach(([kind, words], k) => {
-      const y = stage.height - pitch * (rows.length - k) + 0.4 * pitch;
+      const y = stage.height - foot - pitch * (rows.length - k) + 0.4 * pitch;
       const x = left ? 0 : stage.width - sample;
       marks.push(...keySample(plate, kind, x, y, sample));
       marks.push({
         kind: 'text',
-        x: left ? sample + 12 : stage.width - sample - 12,
+        x: left ? sample + KEY_GAP : stage.width - sample - KEY_GAP,
         y: y + 0.335 * size,
         runs: plain(words),
         size,

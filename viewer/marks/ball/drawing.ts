@@ -2,7 +2,7 @@ import type { Drawing, Mark } from '../display-list.ts';
 import { arrowLayers, endLayers, tickLayers } from './arrow-marks.ts';
 import { chainLayers } from './chain-marks.ts';
 import { coneLayers, washMarks } from './cone-marks.ts';
-import { momentText } from './corners.ts';
+import { momentText, stepName } from './corners.ts';
 import { groundMarks } from './ground.ts';
 import { type LabelOptions, letter } from './labels.ts';
 import { type BallView, type Layer, type Plate, plateOf } from './plate.ts';
@@ -56,7 +56,7 @@ export function ballDrawing(view: BallView, options: LabelOptions, ground = true
 function describe(plate: Plate): string {
   const { head } = plate.event.history;
   const { moment, cone } = plate;
-  const selected = cone ? ` Step ${cone.step + 1} is selected.` : '';
+  const selected = cone ? ` Step ${stepName(cone.step)} is selected.` : '';
   return (
     `Parton shower in a ball: radius is evolution time ln(t0/t), direction is momentum. ` +
     `${head.process.name} at ${head.sqrtS} GeV, ${moment.partons} partons, ${moment.steps} steps.${selected}`

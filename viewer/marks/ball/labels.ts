@@ -1,10 +1,18 @@
 import { PI } from '../../../engine/index.ts';
-import { projectPoints, ringPoints, rootScaleAt, scaleText, shells } from '../../layout/index.ts';
+import { cos, sin } from '../../../engine/math/index.ts';
+import {
+  projectPoints,
+  ringPoints,
+  rootScaleAt,
+  scaleText,
+  shells,
+  threeDigits,
+} from '../../layout/index.ts';
 import type { ArcText, Halo, Mark, Text } from '../display-list.ts';
 import { plain, type Run, runs } from '../lettering.ts';
 import { widthOf } from '../text-width.ts';
 import { endsOf } from './cone-marks.ts';
-import { cornerMarks, type KeyFold, keyMarks } from './corners.ts';
+import { cornerMarks, type KeyFold, keyMarks, stepName } from './corners.ts';
 import { SHELL_GAP } from './ground.ts';
 import { CAPITAL, letterSize } from './letter-size.ts';
 import { type Box, boxAt, LabelGrid, type LabelWish, placeLabels } from './place-labels.ts';
@@ -17,8 +25,14 @@ export interface LabelOptions {
   readonly keys: KeyFold | null;
   /** Corner texts that name the ball and say where the clock stands. */
   readonly corners: boolean;
-  /** Places in the last picture, by key. */
+  /** Places in the last picture, by key, to be kept where they are still good. */
   readonly before?: ReadonlyMap<string, number>;
+  /** Places to be used as they are: nothing but the clock has changed. */
+  readonly fixed?: ReadonlyMap<string, number>;
+  /** Room left under the keys [px]. */
+  readonly foot?: number;
+  /** Most steps that are numbered, all where absent: fewer while the ball is turned, so that it turns smoothly. */
+  readonly most?: number;
 }
 
 /** The lettering of a plate: what changes with the clock alone, apart from the rest. */
@@ -31,27 +45,48 @@ export interface Lettering {
 /** All lettering of the ball, no label over another. */
 export function letter(plate: Plate, options: LabelOptions): Lettering {
   const { width, height } = plate.stage;
-  const grid = new LabelGrid(width, height);
-  spreadInk(grid, plate);
-  const still: Mark[] = [];
   const corners = options.corners ? cornerMarks(plate) : { still: [], clock: [] };
-  still.push(...corners.still);
-  if (options.keys) still.push(...keyMarks(plate, options.keys));
-  for (const mark of [...still, ...corners.clock]) {
-    for (const box of boxesOf(mark)) grid.take(box);
+  const keys = options.keys ? keyMarks(plate, options.keys, options.foot ?? 0) : [];
+  const labels = [
+    ...letterWishes(plate),
+    ...angleWishes(plate),
+    ...stepWishes(plate, options.most ?? Infinity),
+  ];
+  let places = options.fixed;
+  let shellLabels = shellLabelsOf(plate, places?.get(RAY) ?? 0);
+  if (!places) {
+    const grid = new LabelGrid(width, height);
+    spreadInk(grid, plate);
+    for (const mark of [...corners.still, ...corners.clock, ...keys]) {
+      for (const box of boxesOf(mark)) grid.take(box);
+    }
+    for (const box of [...arcBoxes(rimName(plate)), ...arcBoxes(shellName(plate))]) grid.take(box);
+    const ray = freestRay(plate, grid, options.before?.get(RAY));
+    shellLabels = shellLabelsOf(plate, ray);
+    const found = placeLabels(
+      grid,
+      [...shellLabels, ...labels].map(({ wish }) => wish),
+      options.before,
+    );
+    places = found.set(RAY, ray);
   }
-  still.push(...shellLabels(plate, grid), rimName(plate));
-  const wishes = [...letterWishes(plate), ...angleWishes(plate), ...stepWishes(plate)];
-  const places = placeLabels(
-    grid,
-    wishes.map(({ wish }) => wish),
-    options.before,
-  );
-  for (const label of wishes) {
+  return {
+    still: [
+      ...corners.still,
+      ...keys,
+      rimName(plate),
+      ...drawLabels(plate, [...shellLabels, ...labels], places),
+    ],
+    clock: [...corners.clock, shellName(plate)],
+    places,
+  };
+}
+
+function drawLabels(plate: Plate, labels: readonly Label[], places: ReadonlyMap<string, number>): Mark[] {
+  return labels.flatMap((label) => {
     const at = places.get(label.wish.key);
-    if (at !== undefined) still.push(...drawLabel(plate, label, at));
-  }
-  return { still, clock: [...corners.clock, shellName(plate)], places };
+    return at === undefined || label.unseen ? [] : drawLabel(plate, label, at);
+  });
 }
 
 /** The lettering that follows the clock while nothing else changes. */
@@ -65,8 +100,10 @@ interface Label {
   readonly size: number;
   readonly tint: string;
   readonly paper: string;
-  /** From where a leader is drawn to the label. */
+  /** Whether a line leads from the mark to the label. */
   readonly leader?: boolean;
+  /** Keeps its place free without being drawn. */
+  readonly unseen?: boolean;
 }
 
 function drawLabel(plate: Plate, label: Label, at: number): Mark[] {
@@ -121,6 +158,23 @@ function spreadInk(grid: LabelGrid, plate: Plate): void {
 
 const CIRCLE = ringPoints([0, 0, 1], PI / 2, 120);
 
+// Boxes along a text on a curve, one every 12 px.
+function arcBoxes(mark: ArcText): Box[] {
+  const length = widthOf(mark.runs, mark.size);
+  const count = Math.ceil(length / 12);
+  const side = 1.2 * mark.size;
+  const middle = mark.radius + CAPITAL * 0.5 * mark.size;
+  return Array.from({ length: count }, (_, k) => {
+    const angle = mark.angle + (((k + 0.5) / count - 0.5) * length) / mark.radius;
+    return {
+      x: mark.x + middle * cos(angle) - side / 2,
+      y: mark.y + middle * sin(angle) - side / 2,
+      width: side,
+      height: side,
+    };
+  });
+}
+
 /** Boxes that a mark of lettering covers; shapes cover nothing. */
 export function boxesOf(mark: Mark): Box[] {
   if (mark.kind === 'group') return mark.marks.flatMap(boxesOf);
@@ -130,49 +184,67 @@ export function boxesOf(mark: Mark): Box[] {
   return [{ x: x - 2, y: mark.y - 0.85 * mark.size, width: width + 4, height: 1.1 * mark.size }];
 }
 
-function shellLabels(plate: Plate, grid: LabelGrid): Mark[] {
+/** Key under which the places hold the ray that carries the shells' labels. */
+const RAY = 'ray';
+// Angles of the rays from upright [rad], rightward positive, in order of preference.
+const RAYS = [0, 0.2, -0.2, 0.4, -0.4, 0.62, -0.62, 0.85, -0.85, 1.1, -1.1].map((angle) => ({
+  x: sin(angle),
+  y: cos(angle),
+}));
+
+// Labels of all shells stand on one ray; on the one where they cover least.
+function freestRay(plate: Plate, grid: LabelGrid, before: number | undefined): number {
+  let best = 0;
+  let least = Infinity;
+  RAYS.forEach((_, ray) => {
+    let cost = ray === before ? -12 : 2.5 * ray;
+    for (const { wish } of shellLabelsOf(plate, ray)) cost += Math.min(60, grid.cost(boxAt(wish, 0)));
+    if (cost >= least) return;
+    least = cost;
+    best = ray;
+  });
+  return best;
+}
+
+function shellLabelsOf(plate: Plate, ray: number): Label[] {
   const { palette, projection, shell } = plate;
   const { x, y, scale } = projection;
   const size = letterSize(plate.stage.size);
-  const found: Mark[] = [];
-  for (const { value, radius } of shells(plate.event.strands.scale, SHELL_GAP / scale)) {
+  return shells(plate.event.strands.scale, SHELL_GAP / scale).map(({ value, radius }) => {
     const line = plain(`${scaleText(value)} GeV`);
-    const width = widthOf(line, size);
-    const baseline = y - radius * scale + (CAPITAL * size) / 2;
-    const box = {
-      x: x - width / 2 - 3,
-      y: baseline - CAPITAL * size - 3,
-      width: width + 6,
-      height: CAPITAL * size + 6,
-    };
-    // The current shell is named along its curve, and its line would strike the label through.
-    if (Math.abs(radius - shell) * scale < 0.55 * size || grid.cost(box) === Infinity) continue;
-    grid.take(box);
     const inside = radius <= shell;
-    found.push({
-      kind: 'text',
-      x,
-      y: baseline,
+    return {
+      wish: {
+        key: `shell ${value}`,
+        x: x + radius * scale * RAYS[ray].x,
+        y: y - radius * scale * RAYS[ray].y,
+        clearance: 0,
+        width: widthOf(line, size),
+        height: CAPITAL * size + 2,
+        must: true,
+        centred: true,
+      },
       runs: line,
       size,
+      // The line of the current shell would strike its label through, and that shell is named along its curve.
+      unseen: Math.abs(radius - shell) * scale < 0.6 * size,
       tint: inside ? palette.second : palette.faint,
-      anchor: 'middle',
-      halo: { tint: inside ? palette.lit : palette.shade, width: 2.4 },
-    });
-  }
-  return found;
+      paper: inside ? palette.lit : palette.shade,
+    };
+  });
 }
 
 // Names stand on the left, the rim's below the middle and the shell's above it, so that they cannot meet.
-const SHELL_NAME_ANGLE = PI + 0.34;
-const RIM_NAME_ANGLE = PI - 0.3;
+const SHELL_NAME_ANGLE = PI + 0.42;
+const RIM_NAME_ANGLE = PI - 0.14;
 
 function rimName(plate: Plate): ArcText {
   const { palette, projection } = plate;
   const { head } = plate.event.history;
   const { scale } = plate.event.strands;
   const value = scaleText(rootScaleAt(scale, scale.end));
-  const reached = Math.abs(rootScaleAt(scale, scale.end) / Math.sqrt(head.tLow) - 1) < 1e-9;
+  // In kT ordering the clock ends at the cutoff itself, in other orderings where the cutoff lets nothing through any more.
+  const reached = Math.abs(rootScaleAt(scale, scale.end) / Math.sqrt(head.cutoff) - 1) < 1e-9;
   const size = letterSize(plate.stage.size);
   return {
     kind: 'arcText',
@@ -180,7 +252,7 @@ function rimName(plate: Plate): ArcText {
     y: projection.y,
     radius: projection.scale + 0.42 * size,
     angle: RIM_NAME_ANGLE,
-    runs: runs(`rim  √*t* = ${value} GeV${reached ? ', end of the clock' : ''}`),
+    runs: runs(`rim  √*t* = ${value} GeV${reached ? ', cutoff' : ''}`),
     size,
     tint: palette.second,
     halo: { tint: palette.ground, width: 2 },
@@ -199,8 +271,8 @@ function shellName(plate: Plate): ArcText {
     y: projection.y,
     radius,
     // Half a turn at most: on a small shell the name stands at the top.
-    angle: SHELL_NAME_ANGLE + Math.max(0, Math.min(PI / 2 - 0.34, 26 / radius)),
-    runs: runs(`now  √*t* = ${scaleText(rootScaleAt(scale, plate.time))} GeV`, true),
+    angle: SHELL_NAME_ANGLE + Math.max(0, Math.min(PI / 2 - 0.42, 26 / radius)),
+    runs: runs(`now  √*t* = ${threeDigits(rootScaleAt(scale, plate.time))} GeV`, true),
     size,
     tint: palette.ink,
     halo: { tint: palette.shade, width: 2.2 },
@@ -241,7 +313,7 @@ function angleWishes(plate: Plate): Label[] {
   return cone.rings.flatMap((ring) => {
     const at = labelPoint(plate, ring.axis, ring.angle, cone.radius);
     if (!at) return [];
-    const line = runs(`${RING_NAMES[ring.kind]} = ${angleText(ring.angle)} rad`, ring.kind !== 'birth');
+    const line = runs(`${RING_NAMES[ring.kind]} = ${threeDigits(ring.angle)} rad`, ring.kind !== 'birth');
     return [
       {
         wish: {
@@ -261,12 +333,6 @@ function angleWishes(plate: Plate): Label[] {
     ];
   });
 }
-
-/** An angle as a label prints it: three significant digits [rad]. */
-export const angleText = (angle: number): string =>
-  angle >= 0.001
-    ? String(Number(angle.toPrecision(3)))
-    : angle.toExponential(1).replace('e-', '·10^{−') + '}';
 
 // The point of the ring that is farthest up on the paper, on its near half where it has one.
 function labelPoint(
@@ -291,7 +357,10 @@ function labelPoint(
   return best;
 }
 
-function stepWishes(plate: Plate): Label[] {
+// In events with more steps those to come have a place but no number yet: nobody looks for one among hundreds.
+const MOST_AHEAD = 60;
+
+function stepWishes(plate: Plate, most: number): Label[] {
   const { palette, steps, cone, hover, shell } = plate;
   const { stepRadius } = plate.event.strands;
   const count = stepRadius.length;
@@ -300,10 +369,10 @@ function stepWishes(plate: Plate): Label[] {
   );
   const order = [...first];
   for (let step = 0; step < count; step++) if (!first.includes(step)) order.push(step);
-  return order.map((step) => {
+  return order.slice(0, most).map((step) => {
     const chosen = step === cone?.step;
     const past = stepRadius[step] <= shell + SAME_RADIUS;
-    const line = plain(String(step + 1), chosen || step === hover);
+    const line = plain(stepName(step), chosen || step === hover);
     const size = letterSize(plate.stage.size) * (chosen ? 1.1 : 1);
     return {
       wish: {
@@ -317,6 +386,7 @@ function stepWishes(plate: Plate): Label[] {
       },
       runs: line,
       size,
+      unseen: !past && count > MOST_AHEAD && !first.includes(step),
       tint: past || chosen ? palette.ink : palette.faint,
       paper: past ? palette.lit : palette.shade,
     };

@@ -18,6 +18,8 @@ export interface LabelWish {
   readonly height: number;
   /** A wish that must be met takes the least bad place where no free one is left (labels still never overlap). */
   readonly must?: boolean;
+  /** Stands on its mark, in the middle, or nowhere. */
+  readonly centred?: boolean;
 }
 
 /** Places that are tried about a mark, in order of preference: right, left, above, below, then the corners. */
@@ -114,7 +116,7 @@ export class LabelGrid {
 
 /** The box of a label at one of the PLACES about its mark. */
 export function boxAt(wish: LabelWish, at: number): Box {
-  const [ux, uy] = PLACES[at];
+  const [ux, uy] = wish.centred ? [0, 0] : PLACES[at];
   const { x, y, clearance, width, height } = wish;
   return {
     x: x + ux * clearance + (ux > 0 ? 0 : ux < 0 ? -width : -width / 2),
@@ -144,7 +146,7 @@ export function placeLabels(
     const kept = before.get(wish.key);
     let least = wish.must ? Infinity : MOST_INK * cells;
     let best = -1;
-    for (let at = 0; at < PLACES.length; at++) {
+    for (let at = 0; at < (wish.centred ? 1 : PLACES.length); at++) {
       const cost = grid.cost(boxAt(wish, at)) + (kept === at ? -4 : 0.3 * at);
       if (cost >= least) continue;
       least = cost;

@@ -21,16 +21,16 @@ export function stepLayers(plate: Plate): { future: Layer[]; past: Layer[] } {
     if (stepRadius[step] > shell + SAME_RADIUS) {
       const stroke = { tint: mix(palette.hairline, palette.shade, 0.25), width: 1 * size };
       future.push({
-        depth: depth + 0.005,
+        depth: depth + 0.1,
         marks: [{ kind: 'circle', x, y, radius: 0.8 * radius, fill: { tint: palette.shade }, stroke }],
       });
     } else {
-      past.push({ depth: depth + 0.005, marks: ring(plate, x, y, radius, depth) });
+      past.push({ depth: depth + 0.1, marks: ring(plate, x, y, radius, depth) });
     }
   }
   const { x, y } = plate.projection;
   past.push({
-    depth: 0.002,
+    depth: 0.12,
     marks: [
       { kind: 'circle', x, y, radius: (4.4 + LIT_EDGE) * size, fill: { tint: palette.lit } },
       { kind: 'circle', x, y, radius: 4.4 * size, fill: { tint: palette.ink } },

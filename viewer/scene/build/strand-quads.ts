@@ -14,7 +14,9 @@ export const LINE_STYLES = {
   silhouette: 7,
   turn: 8,
   net: 9,
-  shell: 10,
+  outline: 10,
+  rim: 11,
+  dotted: 12,
 } as const;
 
 /**
@@ -140,4 +142,5 @@ const hasGaps = (style: number): boolean =>
   style === LINE_STYLES.antiquark ||
   style === LINE_STYLES.partner ||
   style === LINE_STYLES.birth ||
-  style === LINE_STYLES.silhouette;
+  style === LINE_STYLES.silhouette ||
+  style === LINE_STYLES.dotted;

@@ -16,15 +16,20 @@ in vec3 aWhen;
 in vec2 aLine;
 out vec2 vLocal;
 out float vDepth;
+flat out float vPaper;
 flat out ivec2 vGlyph;
 flat out vec3 vLook;
 flat out int vFuture;
 
 void main() {
-  float radius = aTurn.w < 0.0 ? uShell : aTurn.w;
   float now = uShell + SAME;
   bool alive = aWhen.x <= now && now < aWhen.y;
   bool future = now < aWhen.x && aWhen.z > 0.5;
+  if (!(alive || future)) {
+    gl_Position = NOWHERE;
+    return;
+  }
+  float radius = aTurn.w < 0.0 ? uShell : aTurn.w;
   vec3 direction = turned(aDirection, aTangent, aTurn.xyz, radius);
   vec3 seen = uView * direction * radius;
   int glyph = int(aGlyph.x + 0.5);
@@ -32,7 +37,7 @@ void main() {
   float inPaper = length(slope.xy);
   float size = uSize * (future ? FUTURE_WIDTH : 1.0);
   bool hidden = aLine.y > 0.0 && inPaper * uScale * aLine.y < 2.2 * aGlyph.z * uSize;
-  if (!(alive || future) || hidden) {
+  if (hidden) {
     gl_Position = NOWHERE;
     return;
   }
@@ -47,6 +52,7 @@ void main() {
   vec2 local = reach * vec2(corner < 2 ? -1.0 : 1.0, (corner & 1) == 0 ? 1.0 : -1.0);
   vLocal = local;
   vDepth = seen.z;
+  vPaper = paperCode(onPaper(seen));
   vGlyph = ivec2(glyph, int(aGlyph.y + 0.5));
   vLook = vec3(look, aLine.x);
   vFuture = future ? 1 : 0;
@@ -59,6 +65,7 @@ ${CODES}
 uniform vec3 uHairline;
 in vec2 vLocal;
 in float vDepth;
+flat in float vPaper;
 flat in ivec2 vGlyph;
 flat in vec3 vLook;
 flat in int vFuture;
@@ -69,7 +76,7 @@ float triangle(vec2 p, float len, float breadth) {
 }
 
 void main() {
-  vec3 paper = paperAt(placeOnPaper());
+  vec3 paper = paperOf(vPaper);
   bool future = vFuture == 1;
   int glyph = vGlyph.x;
   float r = length(vLocal);

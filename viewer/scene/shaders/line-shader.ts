@@ -21,6 +21,7 @@ out float vHalf;
 out float vRadius;
 out float vAlong;
 out float vDepth;
+out float vPaper;
 flat out int vStyle;
 
 float edgeOf(int style) {
@@ -28,16 +29,21 @@ float edgeOf(int style) {
   return style == TURN ? 1.2 * EDGE * uSize : 0.0;
 }
 
+// A difference of two places as it lies on the paper.
+vec2 stretch(vec3 d) {
+  return uScale * vec2(dot(vec3(uView[0].x, uView[1].x, uView[2].x), d), -dot(vec3(uView[0].y, uView[1].y, uView[2].y), d));
+}
+
 void main() {
   int corner = gl_VertexID & 3;
   bool first = corner < 2;
   float side = (corner & 1) == 0 ? 1.0 : -1.0;
   int style = int(aLine.y + 0.5);
-  float grow = style >= NET ? uShell : 1.0;
+  float grow = style == NET || style == OUTLINE ? uShell : 1.0;
   vec3 seen = uView * aPoint * grow;
   vec2 here = onPaper(seen);
-  vec2 into = here - onPaper(uView * aBefore * grow);
-  vec2 away = onPaper(uView * aAfter * grow) - here;
+  vec2 into = stretch(aPoint - aBefore) * grow;
+  vec2 away = stretch(aAfter - aPoint) * grow;
   float intoLength = length(into);
   float awayLength = length(away);
   into = intoLength > 1e-3 ? into / intoLength : vec2(0.0);
@@ -63,6 +69,7 @@ void main() {
   vRadius = aRadius;
   vAlong = aAlong;
   vDepth = seen.z;
+  vPaper = paperCode(here);
   vStyle = style;
   gl_Position = inClip(here + offset * side * reach, seen.z);
 }
@@ -75,11 +82,13 @@ const [birthDash, birthGap, birthDot, birthGap2] = RING_DASH.birth;
 export const LINE_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}
 ${STYLES}
 uniform vec3 uRule;
+uniform vec3 uHairline;
 in float vAcross;
 in float vHalf;
 in float vRadius;
 in float vAlong;
 in float vDepth;
+in float vPaper;
 flat in int vStyle;
 
 float edgeOf(int style) {
@@ -94,7 +103,7 @@ float dashed(float begin, float dash, float period) {
 
 void main() {
   bool happened = vStyle > OTHER || vRadius <= uShell + SAME;
-  vec3 paper = paperAt(placeOnPaper());
+  vec3 paper = paperOf(vPaper);
   float across = abs(vAcross);
   float half_ = vHalf;
   if (!happened) half_ = max(half_ * FUTURE_WIDTH, vStyle == GLUON ? ${float(GLUON_LEAST / 2)} : 0.45);
@@ -118,6 +127,11 @@ void main() {
     if (vStyle == SILHOUETTE) {
       fade = 0.45;
       drawn *= dashed(0.0, 6.0 * uSize, 10.0 * uSize);
+    }
+    if (vStyle >= RIM) tint = uHairline;
+    if (vStyle == DOTTED) {
+      float at = mod(vAlong, 4.2 * uSize) - 2.1 * uSize;
+      drawn = 0.55 * inside(length(vec2(at, vAcross)) - 0.48 * uSize);
     }
     if (vStyle == NET) {
       if (vDepth < 0.0) discard;

@@ -1,4 +1,4 @@
-import { FUTURE, LIT_EDGE } from '../../marks/index.ts';
+import { FUTURE, LIMB, LIT_EDGE } from '../../marks/index.ts';
 
 const float = (value: number): string => (Number.isInteger(value) ? `${value}.0` : String(value));
 
@@ -14,6 +14,10 @@ uniform float uSize;
 uniform float uPixel;
 uniform float uShell;
 const float SAME = 1e-6;
+float limbOf(vec2 d, float shell) {
+  float t = length(d - vec2(${float(LIMB.x)}, ${float(LIMB.y)}) * shell) / (${float(LIMB.radius)} * shell);
+  return clamp((t - ${float(LIMB.from)}) / ${float(1 - LIMB.from)}, 0.0, 1.0);
+}
 const float EDGE = ${float(LIT_EDGE)};
 const float FUTURE_FADE = ${float(FUTURE.fade)};
 const float FUTURE_WIDTH = ${float(FUTURE.width)};
@@ -33,8 +37,15 @@ float turnedBy(float angle, float rise, float height) {
   return angle * sqrt(share * (2.0 - share));
 }
 vec3 turned(vec3 direction, vec3 tangent, vec3 turn, float radius) {
+  if (turn.x == 0.0) return direction;
   float s = turnedBy(turn.x, radius - turn.y, turn.z);
   return direction * cos(s) + tangent * sin(s);
+}
+// 0 to 1: inside the current shell, the nearer to 1 the nearer to the shaded limb; 2: in the shade outside.
+float paperCode(vec2 paper) {
+  vec2 d = paper - uCentre;
+  float shell = uShell * uScale;
+  return dot(d, d) < shell * shell ? limbOf(d, shell) : 2.0;
 }
 float depthWidth(float depth) { return 1.0 + clamp(depth, 0.0, 1.0) / 7.0; }
 `;
@@ -51,15 +62,9 @@ out vec4 colour;
 vec2 placeOnPaper() { return vec2(gl_FragCoord.x, uPaper.y * uPixel - gl_FragCoord.y) / uPixel; }
 // What is inside within half a pixel of a border at distance 0, negative inside.
 float inside(float distance) { return clamp(0.5 - distance * uPixel, 0.0, 1.0); }
-vec3 litAt(vec2 p) {
-  float shell = uShell * uScale;
-  float t = length(p - uCentre + vec2(0.20, 0.25) * shell) / (1.32 * shell);
-  return mix(uLit, uLitEdge, clamp((t - 0.62) / 0.38, 0.0, 1.0));
-}
-vec3 paperAt(vec2 p) {
-  float r = length(p - uCentre);
-  return r < uShell * uScale ? litAt(p) : r < uScale ? uShade : uGround;
-}
+vec3 litTint(float limb) { return mix(uLit, uLitEdge, limb); }
+// The paper under a mark by the code that its vertices were given.
+vec3 paperOf(float code) { return code < 1.5 ? litTint(clamp(code, 0.0, 1.0)) : uShade; }
 float depthFade(float depth) { return 0.46 * clamp(0.5 - 0.5 * depth, 0.0, 1.0); }
 // Near to far: what has happened from 0.02 to 0.82, the current shell at 0.42, what is to come from 0.86 to 0.98.
 float happenedOrder(float depth) { return 0.02 + 0.8 * clamp(0.5 - 0.5 * depth, 0.0, 1.0); }

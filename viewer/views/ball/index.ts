@@ -1,0 +1,1 @@
+export { BallElement } from './ball.ts';
