@@ -33,7 +33,6 @@ export {
   washShares,
 } from './ball/index.ts';
 export { type Canvas2d, drawingFonts, paintDrawing } from './canvas.ts';
-export { LIMB } from './display-list.ts';
 export type {
   ArcText,
   Circle,
@@ -48,6 +47,7 @@ export type {
   Stroke,
   Text,
 } from './display-list.ts';
+export { LIMB } from './display-list.ts';
 export { FACES, type Face, type FaceSpec, plain, type Run, runs, SCRIPT, textOf } from './lettering.ts';
 export { litEdgeOf, luminous, type Palette, palette } from './palette.ts';
 export {

@@ -1,8 +1,8 @@
 import {
   type BufferGeometry,
   DoubleSide,
-  Camera as GraphicsCamera,
   GLSL3,
+  Camera as GraphicsCamera,
   Matrix3,
   Mesh,
   RawShaderMaterial,
@@ -23,19 +23,34 @@ import {
 } from '../layout/index.ts';
 import { type Palette, palette as palettes, SHELL_GAP, washShares } from '../marks/index.ts';
 import { ballUniforms, writePalette } from './ball-uniforms.ts';
-import { chainQuads } from './build/chain-quads.ts';
-import { coneGlyphs } from './build/cone-glyphs.ts';
-import { coneQuads } from './build/cone-quads.ts';
-import { eventGlyphs, glyphQuads } from './build/glyph-quads.ts';
-import { netQuads, outlineQuads, shellQuads } from './build/circle-quads.ts';
-import type { Quads } from './build/quads.ts';
-import { type LineQuads, lineQuads, measureAlong, strandQuads } from './build/strand-quads.ts';
+import {
+  chainQuads,
+  coneGlyphs,
+  coneQuads,
+  eventGlyphs,
+  glyphQuads,
+  type LineQuads,
+  lineQuads,
+  measureAlong,
+  netQuads,
+  outlineQuads,
+  type Quads,
+  shellQuads,
+  strandQuads,
+} from './build/index.ts';
 import { meshOf, refill } from './mesh.ts';
-import { CHAIN_FRAGMENT, CHAIN_VERTEX } from './shaders/chain-shader.ts';
-import { GLYPH_FRAGMENT, GLYPH_VERTEX } from './shaders/glyph-shader.ts';
-import { GROUND_FRAGMENT, SCREEN_VERTEX, WASH_FRAGMENT } from './shaders/ground-shader.ts';
-import { LINE_FRAGMENT, LINE_VERTEX } from './shaders/line-shader.ts';
-import { SceneError } from './webgl.ts';
+import { SceneError } from './scene-error.ts';
+import {
+  CHAIN_FRAGMENT,
+  CHAIN_VERTEX,
+  GLYPH_FRAGMENT,
+  GLYPH_VERTEX,
+  GROUND_FRAGMENT,
+  LINE_FRAGMENT,
+  LINE_VERTEX,
+  SCREEN_VERTEX,
+  WASH_FRAGMENT,
+} from './shaders/index.ts';
 
 const NO_LINES: LineQuads = lineQuads([]);
 // One triangle that covers the canvas.

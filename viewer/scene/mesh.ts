@@ -1,5 +1,5 @@
 import { BufferAttribute, BufferGeometry, Mesh, type RawShaderMaterial } from 'three';
-import type { Quads } from './build/quads.ts';
+import type { Quads } from './build/index.ts';
 
 /** Geometry of plain quads; whoever makes it disposes of it. */
 export function geometryOf(quads: Quads): BufferGeometry {

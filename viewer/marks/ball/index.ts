@@ -17,7 +17,7 @@ export {
   letter,
   letterClock,
 } from './labels.ts';
+export { letterSize } from './letter-size.ts';
 export { type Box, boxAt, LabelGrid, type LabelWish, PLACES, placeLabels } from './place-labels.ts';
 export { type BallView, type Plate, plateOf, projectSteps, SAME_RADIUS } from './plate.ts';
 export { ringRadius, selectionMarks } from './step-marks.ts';
-export { letterSize } from './letter-size.ts';

@@ -1,6 +1,6 @@
 import { type BallEvent, type Cone, greatCircle } from '../../layout/index.ts';
 import { endsOf, TIP_LENGTH, turnPath } from '../../marks/index.ts';
-import { endLook, type Glyph, GLYPHS, still } from './glyph-quads.ts';
+import { endLook, GLYPHS, type Glyph, still } from './glyph-quads.ts';
 
 /** Glyphs of a selected step's cone: the ends of *i*, *j* and *k* on its shell, and the tip of the emitter's arrow. */
 export function coneGlyphs(event: BallEvent, cone: Cone, scale: number, size: number): Glyph[] {

@@ -1,6 +1,6 @@
 import { type Cone, coneSilhouette, type Projection, ringPoints } from '../../layout/index.ts';
 import { RING, RING_PIECES, turnPath } from '../../marks/index.ts';
-import { type LineQuads, LINE_STYLES, lineQuads, type LineSpec } from './strand-quads.ts';
+import { LINE_STYLES, type LineQuads, type LineSpec, lineQuads } from './strand-quads.ts';
 
 /** Lines of a selected step's cone as seen by a camera: its rings, the silhouette of the opening cone, the emitter's turn. */
 export function coneQuads(cone: Cone | null, projection: Projection, size: number): LineQuads {

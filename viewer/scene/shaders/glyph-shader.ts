@@ -1,4 +1,4 @@
-import { GLYPHS } from '../build/glyph-quads.ts';
+import { GLYPHS } from '../build/index.ts';
 import { PAINTING, PLACING, SHARED } from './shared.ts';
 
 const CODES = Object.entries(GLYPHS)

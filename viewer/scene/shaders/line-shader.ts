@@ -1,5 +1,5 @@
 import { ANTIQUARK_DASH, GLUON_LEAST, RING, RING_DASH } from '../../marks/index.ts';
-import { LINE_STYLES } from '../build/strand-quads.ts';
+import { LINE_STYLES } from '../build/index.ts';
 import { PAINTING, PLACING, SHARED } from './shared.ts';
 
 const float = (value: number): string => (Number.isInteger(value) ? `${value}.0` : String(value));

@@ -1,7 +1,7 @@
 import { ContextProvider } from '@lit/context';
 import {
-  growEvent,
   type GrowSettings,
+  growEvent,
   type History,
   measureSteps,
   resolveSettings,

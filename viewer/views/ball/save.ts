@@ -1,6 +1,6 @@
 import {
-  type Drawing,
   ballDrawing,
+  type Drawing,
   drawingFonts,
   type KeyFold,
   paintDrawing,
