@@ -1,11 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import {
+  branchingNotation,
   channelNotation,
   parseNotation,
   partonSymbol,
   plainNotation,
   processNotation,
 } from '../../../viewer/views/type/index.ts';
+import { sampleHistories } from './sample-file.ts';
 
 describe('notation', () => {
   test('sets symbols italic and their indices upright and lowered', () => {
@@ -48,6 +50,15 @@ describe('symbols', () => {
 
   test('writes the positron before its electron', () => {
     expect(plainNotation(processNotation([11, -11], [1, -1]))).toBe('e+\u2009e− → d\u2009d\u0304');
+  });
+
+  test('names a step by its own flavours, by its kernel where a row is missing', () => {
+    const history = sampleHistories(1)[0];
+    expect(plainNotation(branchingNotation(history, 0))).toMatch(/^(d → d\u2009g|d̄ → d̄\u2009g)$/);
+    const j = history.steps.j.slice().fill(-1);
+    expect(branchingNotation({ ...history, steps: { ...history.steps, j } }, 0)).toBe(
+      channelNotation('q_qg'),
+    );
   });
 
   test('leaves a kernel word that is not ours as its author wrote it', () => {

@@ -3,7 +3,7 @@ import { customElement, state } from 'lit/decorators.js';
 import { aliveEntries, KINDS } from '../../../engine/index.ts';
 import { StoreSlice, stepNumber } from '../../state/index.ts';
 import {
-  channelNotation,
+  branchingNotation,
   controlStyles,
   countText,
   decimalText,
@@ -78,9 +78,8 @@ export class CardElement extends LitElement {
 
   #stepCard(step: number) {
     const history = this.#history.value!;
-    const { steps, channels, head } = history;
+    const { steps, head } = history;
     const groups = stepRows(history, this.#measures.value!, step);
-    const channel = channelNotation(channels[steps.channel[step]] ?? '');
     const generation = steps.generation[step] >= 0 ? `, generation ${steps.generation[step]}` : '';
     const measuredTitle = `from the four-momenta, angles in the ${head.meaning.angleFrame ?? 'event'} frame`;
     const explained = groups.flat().find(({ key }) => key === this.explained);
@@ -88,7 +87,7 @@ export class CardElement extends LitElement {
       <header>
         <h2>Step ${stepNumber(step)}</h2>
         <div class="state" role="status">
-          ${this.copied || html`${notation(channel)}, ${KINDS[steps.kind[step]]}${generation}`}
+          ${this.copied || html`${notation(branchingNotation(history, step))}, ${KINDS[steps.kind[step]]}${generation}`}
         </div>
       </header>
       <div class="body" tabindex="-1">
@@ -122,10 +121,9 @@ export class CardElement extends LitElement {
     const label = `${plainNotation(symbol)} ${plainNotation(name)}`.trim();
     return html`<tr class="${differs ? 'differs chosen' : ''} ${extra ? 'extra' : ''}" data-key=${key} @mouseenter=${explain} @mouseleave=${this.#stopExplaining}>
       <th scope="row">
-        <button type="button" class="term" title=${row.definition} aria-label="${label}: copy claimed and measured"
-          @focus=${explain} @blur=${this.#stopExplaining}
+        <button type="button" class="term" title=${row.definition} @focus=${explain} @blur=${this.#stopExplaining}
           @click=${() => this.#copy(`${label}\t${claimed}\t${measured}\t${plainNotation(unit)}`, label)}
-        >${notation(symbol)}</button>
+        >${notation(symbol)}<span class="unseen"> ${plainNotation(name)}: copy claimed and measured</span></button>
       </th>
       <td class="left name">${notation(name)}</td>
       ${this.#number(claimed, label)}${this.#number(measured, label)}

@@ -68,10 +68,11 @@ export function eventRows(history: History, finalPartons: number): EventRow[][] 
     { name: 'resolution', value: `*k*_{T}^{2} ≥ ${shortNumber(head.cutoff)} GeV^{2}` },
     { name: 'ordering', value: head.ordering },
   ];
-  const settings = Object.entries(head.shower).map(([name, value]) => ({
-    name,
-    value: typeof value === 'number' && IN_GEV.has(name) ? `${settingText(value)} GeV` : settingText(value),
-  }));
+  const settings = Object.entries(head.shower).map(([name, value]) => {
+    if (name === 'quark' && value === null) return { name, value: 'electroweak mix' };
+    const energy = typeof value === 'number' && IN_GEV.has(name);
+    return { name, value: energy ? `${settingText(value)} GeV` : settingText(value) };
+  });
   const origin: EventRow[] = [
     { name: 'producer', value: `${head.producer.name} ${head.producer.version}` },
     { name: 'seed', value: head.seed === null ? '—' : String(head.seed) },

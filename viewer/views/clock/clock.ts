@@ -111,7 +111,8 @@ export class ClockElement extends LitElement {
     this.motion = playhead.playing ? (playhead.direction > 0 ? 'forward' : 'back') : '';
     this.speed = playhead.speed;
     const now = this.renderRoot.querySelector<SVGGElement>('.now-mark');
-    if (!now) return;
+    // The event may be gone already while the drawing still stands.
+    if (!now || !this.#history.value) return;
     const x = playhead.end > 0 ? (playhead.time / playhead.end) * this.#box.width : 0;
     now.transform.baseVal.getItem(0).setTranslate(x, 0);
     this.renderRoot.querySelector<SVGRectElement>('.past')!.width.baseVal.value = x;
@@ -183,12 +184,12 @@ export class ClockElement extends LitElement {
     const forward = this.motion === 'forward';
     const back = this.motion === 'back';
     return html`<div class="transport" role="group" aria-label="playback">
-      ${button('start', 'start', 'to the hard process', 'Home', () => playhead.toStart())}
+      ${button('start', 'start', 'start: to the hard process', 'Home', () => playhead.toStart())}
       ${button('back', 'step', 'step back', '←', () => playhead.stepBack())}
       ${button(back ? 'pause' : 'reverse', back ? 'pause' : 'reverse', back ? 'pause' : 'play in reverse', back ? 'Space' : 'Shift ←', () => (back ? playhead.pause() : playhead.reverse()))}
       ${button(forward ? 'pause' : 'play', forward ? 'pause' : 'play', forward ? 'pause' : 'play', 'Space', () => (forward ? playhead.pause() : playhead.play()))}
       ${button('forward', 'step', 'step forward', '→', () => playhead.stepForward())}
-      ${button('end', 'end', 'to the cutoff', 'End', () => playhead.toEnd())}
+      ${button('end', 'end', 'end: to the cutoff', 'End', () => playhead.toEnd())}
     </div>`;
   }
 

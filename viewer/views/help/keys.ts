@@ -4,7 +4,7 @@ export interface KeyLine {
   readonly does: string;
 }
 
-/** Every key of the workbench, in groups. */
+/** Every key of the workbench, in groups; those of the ball are the ball's own. */
 export const KEY_GROUPS: readonly { readonly name: string; readonly lines: readonly KeyLine[] }[] = [
   {
     name: 'Clock',
@@ -25,6 +25,14 @@ export const KEY_GROUPS: readonly { readonly name: string; readonly lines: reado
       { keys: ['n', '↓'], does: 'next event' },
       { keys: ['p', '↑'], does: 'previous event' },
       { keys: ['g'], does: 'go to an event by number' },
+    ],
+  },
+  {
+    name: 'Ball, while it has the focus',
+    lines: [
+      { keys: ['←', '→', '↑', '↓'], does: 'turn it' },
+      { keys: ['+', '−'], does: 'closer, further away' },
+      { keys: ['0'], does: 'back to the first view' },
     ],
   },
   {

@@ -10,5 +10,5 @@ export {
   residualText,
   shortNumber,
 } from './number-text.ts';
-export { channelNotation, partonSymbol, processNotation } from './parton-symbol.ts';
+export { branchingNotation, channelNotation, partonSymbol, processNotation } from './parton-symbol.ts';
 export { controlStyles, drawingStyles, panelStyles } from './type-styles.ts';

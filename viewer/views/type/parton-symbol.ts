@@ -1,3 +1,5 @@
+import type { History } from '../../../engine/index.ts';
+
 const QUARKS = ['', 'd', 'u', 's', 'c', 'b', 't'];
 const OTHERS: Readonly<Record<number, string>> = {
   11: '*e*^{−}',
@@ -42,4 +44,14 @@ const CHANNEL_NOTATION: Readonly<Record<string, string>> = {
 /** A splitting kernel as notation; a word that is not ours stands as its author wrote it. */
 export function channelNotation(channel: string): string {
   return CHANNEL_NOTATION[channel] ?? channel;
+}
+
+/** What a step did, as notation: with its own flavours where the step names rows that are there, else its kernel. */
+export function branchingNotation({ steps, entries, channels }: History, step: number): string {
+  const rows = [steps.emitter[step], steps.i[step], steps.j[step]];
+  if (!rows.every((row) => row >= 0 && row < entries.length)) {
+    return channelNotation(channels[steps.channel[step]] ?? '');
+  }
+  const [before, i, j] = rows.map((row) => partonSymbol(entries.id[row]));
+  return `${before} → ${i}\u2009${j}`;
 }
