@@ -1,4 +1,6 @@
 import {
+  BOOST_COLUMN,
+  BOOST_NUMBERS,
   type Column,
   type ColumnSpec,
   ENTRY_COLUMNS,
@@ -44,6 +46,9 @@ export function historyToJson(history: History): JsonHistory {
     entries: table(entries, ENTRY_COLUMNS, head.columns.entries, words, own.entries),
     steps: table(steps, STEP_COLUMNS, head.columns.steps, words, own.steps),
   };
+  if (steps.boost && head.columns.steps.includes(BOOST_COLUMN)) {
+    json.steps[BOOST_COLUMN] = rowsOf({ values: steps.boost, each: BOOST_NUMBERS });
+  }
   if (trials && head.columns.trials) {
     json.trials = table(trials, TRIAL_COLUMNS, head.columns.trials, words, own.trials);
   }
@@ -64,11 +69,11 @@ function table(
     if (kind === 'word') json[name] = Array.from(column, (code) => words[name][code] ?? null);
     else json[name] = Array.from(column, numberOrNull);
   }
-  for (const [name, column] of Object.entries(own)) json[name] = ownColumn(column);
+  for (const [name, column] of Object.entries(own)) json[name] = rowsOf(column);
   return json;
 }
 
-function ownColumn({ values, each }: OwnColumn): JsonElement[] {
+function rowsOf({ values, each }: OwnColumn): JsonElement[] {
   if (each === 1) return Array.from(values, numberOrNull);
   const rows: JsonElement[] = [];
   for (let at = 0; at < values.length; at += each) {

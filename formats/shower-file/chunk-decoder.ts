@@ -1,4 +1,6 @@
 import {
+  BOOST_COLUMN,
+  BOOST_NUMBERS,
   type Column,
   type ColumnSpec,
   ENTRY_COLUMNS,
@@ -18,7 +20,7 @@ import { asNumber, asText, decodeBlock, FieldError, Fields } from './fields.ts';
 import { FileBatch, OWN_TABLES, type OwnTable } from './file-batch.ts';
 import { fillColumn, type ReadColumn, readGroups } from './group-reader.ts';
 import type { FileHead } from './head-block.ts';
-import { mostRows } from './layout.ts';
+import { mostOwnConstants, mostRows } from './layout.ts';
 import type { Block } from './read-block.ts';
 
 const MOST_EVENTS = 65536;
@@ -63,7 +65,7 @@ export class ChunkDecoder {
       const columns = new Map<string, ReadColumn>();
       for (const column of readGroups(fields, rows)) columns.set(`${column.table}.${column.name}`, column);
       readHeads(batch, fields, columns, events, number);
-      const limit = { cells: 64 * mostRows(block.payload.length) };
+      const limit = { cells: mostOwnConstants(block.payload.length) };
       for (const table of OWN_TABLES) {
         readStarts(batch, table, columns, events, rows.get(table) ?? 0);
         this.readTable(batch, table, columns, rows.get(table) ?? 0, limit);
@@ -95,7 +97,11 @@ export class ChunkDecoder {
         this.translate(values as Uint8Array, table, spec.name, batch.channels);
       target[spec.name] = values;
     }
-    const known = new Set(SPECS[table].map(({ name }) => name));
+    const known = new Set<string>(SPECS[table].map(({ name }) => name));
+    if (table === 'steps' && batch.steps.boost !== null) {
+      known.add(BOOST_COLUMN);
+      batch.steps.boost = readBoost(columns.get(`steps.${BOOST_COLUMN}`), rows);
+    }
     for (const column of columns.values()) {
       if (column.table !== table || known.has(column.name)) continue;
       limit.cells -= column.constant ? column.elements : 0;
@@ -127,6 +133,16 @@ export function readChunkRange(source: ByteSource, block: Block): { first: numbe
     first: fields.integer('first'),
     events: readEventCount(fields),
   }));
+}
+
+function readBoost(column: ReadColumn | undefined, rows: number): Float64Array {
+  const values = new Float64Array(BOOST_NUMBERS * rows);
+  if (!column) return values.fill(NaN);
+  if (column.each !== BOOST_NUMBERS) {
+    throw new FieldError(`steps.${BOOST_COLUMN}`, `${column.each} numbers a row`, String(BOOST_NUMBERS));
+  }
+  fillColumn(values, column);
+  return values;
 }
 
 function readEventCount(fields: Fields): number {

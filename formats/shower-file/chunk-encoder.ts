@@ -1,4 +1,6 @@
 import {
+  BOOST_COLUMN,
+  BOOST_NUMBERS,
   type ColumnSpec,
   ENTRY_COLUMNS,
   type EventHead,
@@ -13,7 +15,7 @@ import { ChannelWords } from './channel-words.ts';
 import { type ChunkSummaries, summarise } from './event-summaries.ts';
 import { FileBatch, OWN_TABLES, type OwnTable, rowStarts } from './file-batch.ts';
 import { GroupWriter } from './group-writer.ts';
-import { mostRows, TAG_EVENTS } from './layout.ts';
+import { MOST_CONSTANT, MOST_OWN_CONSTANT, mostRows, TAG_EVENTS } from './layout.ts';
 
 /** A chunk ready for the file; a plain object, so that another thread can make it. */
 export interface EncodedChunk {
@@ -88,7 +90,15 @@ export class ChunkEncoder {
   private addEvents(batch: HistoryBatch, from: number, to: number): void {
     const count = to - from;
     const add = (name: string, values: Float64Array | Int32Array) =>
-      this.writer.add({ table: 'events', name, values, start: 0, end: count, each: 1 });
+      this.writer.add({
+        table: 'events',
+        name,
+        values,
+        start: 0,
+        end: count,
+        each: 1,
+        mostConstant: MOST_CONSTANT,
+      });
     for (const table of OWN_TABLES) {
       if (table === 'trials' && !batch.trials) continue;
       const starts = rowStarts(batch, table);
@@ -119,12 +129,22 @@ export class ChunkEncoder {
       Record<string, Float64Array | Int32Array | Uint8Array>
     >;
     for (const { name } of this.present[table]) {
-      const part = { table, name, values: columns[name], start, end, each: 1 };
+      const part = { table, name, values: columns[name], start, end, each: 1, mostConstant: MOST_CONSTANT };
       this.writer.add(name === 'channel' ? channels.translated(part) : part);
+    }
+    if (table === 'steps' && batch.steps.boost !== null && this.sample.columns.steps.includes(BOOST_COLUMN)) {
+      const part = { table, name: BOOST_COLUMN, values: batch.steps.boost, each: BOOST_NUMBERS };
+      this.writer.add({
+        ...part,
+        start: start * BOOST_NUMBERS,
+        end: end * BOOST_NUMBERS,
+        mostConstant: MOST_OWN_CONSTANT,
+      });
     }
     if (!(batch instanceof FileBatch)) return;
     for (const [name, { values, each }] of Object.entries(batch.own[table])) {
-      this.writer.add({ table, name, values, start: start * each, end: end * each, each });
+      const part = { table, name, values, start: start * each, end: end * each, each };
+      this.writer.add({ ...part, mostConstant: MOST_OWN_CONSTANT });
     }
   }
 }

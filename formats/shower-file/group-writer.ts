@@ -4,9 +4,6 @@ import { type ElementType, narrowest, widthOf } from './element-types.ts';
 import { halves, shuffleDoubles, shuffleIntegers } from './shuffle.ts';
 import { hasStructure } from './structure.ts';
 
-/** Above this many elements a column is written out even if constant, so that rows stay in proportion to bytes. */
-const MOST_CONSTANT = 65536;
-
 /** Part of a column, elements `start` to `end`. */
 export interface ColumnPart {
   readonly table: string;
@@ -16,6 +13,8 @@ export interface ColumnPart {
   readonly end: number;
   /** Elements to a row. */
   readonly each: number;
+  /** Most elements that may be written as one where all are the same. */
+  readonly mostConstant: number;
 }
 
 interface Group {
@@ -42,8 +41,10 @@ export class GroupWriter {
 
   add(column: ColumnPart): void {
     const { table, values, start, end, each } = column;
-    const { type, constant } =
+    const form =
       values instanceof Float64Array ? ofDoubles(values, start, end) : ofIntegers(values, start, end);
+    const constant = form.constant && end - start <= column.mostConstant;
+    const { type } = form;
     const key = `${table} ${type} ${constant} ${each}`;
     let group = this.groups.get(key);
     if (!group) {
@@ -122,7 +123,7 @@ interface Form {
 }
 
 function ofDoubles(values: Float64Array, start: number, end: number): Form {
-  return { type: 'f8', constant: mayBeConstant(start, end) && sameBits(values, start, end) };
+  return { type: 'f8', constant: end > start && sameBits(values, start, end) };
 }
 
 /** Whether all elements are the same double, 0 and -0 told apart, all NaN alike. */
@@ -151,9 +152,5 @@ function ofIntegers(values: Int32Array | Uint8Array, start: number, end: number)
     if (value < lowest) lowest = value;
     else if (value > highest) highest = value;
   }
-  return { type: narrowest(lowest, highest), constant: mayBeConstant(start, end) && lowest === highest };
-}
-
-function mayBeConstant(start: number, end: number): boolean {
-  return end > start && end - start <= MOST_CONSTANT;
+  return { type: narrowest(lowest, highest), constant: end > start && lowest === highest };
 }

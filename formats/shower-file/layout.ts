@@ -36,3 +36,15 @@ export const FOOT_BYTES = BLOCK_HEAD_BYTES + FOOT_PAYLOAD_BYTES;
 export function mostRows(bytes: number): number {
   return Math.min(65536 + 64 * bytes, 1 << 24);
 }
+
+/** Most elements of all constant columns of the author's own in a chunk whose payload has `bytes` bytes. */
+export function mostOwnConstants(bytes: number): number {
+  return 4 * mostRows(bytes);
+}
+
+/**
+ * Above so many elements a column is written out even if constant, so that readers find rows in proportion to bytes: with 12 bytes or
+ * more that each column's name and element take, the bounds above hold.
+ */
+export const MOST_CONSTANT = 65536;
+export const MOST_OWN_CONSTANT = 2048;

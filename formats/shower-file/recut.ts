@@ -1,4 +1,10 @@
-import { ENTRY_COLUMNS, type HistoryBatch, STEP_COLUMNS, TRIAL_COLUMNS } from '../../engine/index.ts';
+import {
+  BOOST_NUMBERS,
+  ENTRY_COLUMNS,
+  type HistoryBatch,
+  STEP_COLUMNS,
+  TRIAL_COLUMNS,
+} from '../../engine/index.ts';
 import { wordCode } from './channel-words.ts';
 import { FileBatch, OWN_TABLES, rowStarts } from './file-batch.ts';
 
@@ -24,6 +30,7 @@ export function appendEvents(out: FileBatch, batch: HistoryBatch, from: number, 
     if (!target || !source) continue;
     const { start, end, rows } = span(table);
     for (const { name } of SPECS[table]) target[name].set(source[name].subarray(start, end), target.length);
+    if (table === 'steps') copyBoost(out, batch, start, end);
     if (table !== 'entries') {
       const codes = target.channel.subarray(target.length, target.length + rows);
       translateChannels(out, batch, codes as Uint8Array);
@@ -41,6 +48,15 @@ export function appendEvents(out: FileBatch, batch: HistoryBatch, from: number, 
   appendOwn(out, other, from, to);
   appendSummaries(out, other, from, eventsBefore);
   if (from === 0) out.unknown = { ...out.unknown, ...other.unknown };
+}
+
+function copyBoost(out: FileBatch, batch: HistoryBatch, start: number, end: number): void {
+  const target = out.steps.boost;
+  if (target === null) return;
+  const at = BOOST_NUMBERS * out.steps.length;
+  const part = batch.steps.boost?.subarray(BOOST_NUMBERS * start, BOOST_NUMBERS * end);
+  if (part) target.set(part, at);
+  else target.fill(NaN, at, at + BOOST_NUMBERS * (end - start));
 }
 
 const NOTHING_OWN: Pick<FileBatch, 'own' | 'summaries' | 'unknown'> = {

@@ -41,7 +41,7 @@ export function sampleHead(columns: Partial<SampleHead['columns']> = {}): Sample
     producer: { name: 'a program of the tests', version: '0' },
     columns: {
       entries: ENTRY_COLUMNS.map(({ name }) => name),
-      steps: STEP_COLUMNS.map(({ name }) => name),
+      steps: [...STEP_COLUMNS.map(({ name }) => name), 'boost'],
       trials: TRIAL_COLUMNS.map(({ name }) => name),
       ...columns,
     },
@@ -138,6 +138,10 @@ export function addEvent(batch: HistoryBatch, shape: EventShape): void {
   const end = { entries: entries.length + shape.entries, steps: steps.length + shape.steps };
   fill(entries, ENTRY_COLUMNS, sample.columns.entries, entries.length, end.entries, next, shape.flavour);
   fill(steps, STEP_COLUMNS, sample.columns.steps, steps.length, end.steps, next, shape.flavour);
+  if (steps.boost) {
+    for (let k = 16 * steps.length; k < 16 * end.steps; k++)
+      steps.boost[k] = randomDouble(next, shape.flavour);
+  }
   entries.length = end.entries;
   steps.length = end.steps;
   if (trials) {

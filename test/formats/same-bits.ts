@@ -1,6 +1,6 @@
 import type { History } from '../../engine/index.ts';
 
-type Columns = Readonly<Record<string, ArrayLike<number>>>;
+type Columns = Readonly<Record<string, ArrayLike<number> | null>>;
 
 /** The first place where two histories differ in a bit, null where none does; 0 and -0 differ, all NaN are alike. */
 export function firstDifference(a: History, b: History): string | null {
@@ -21,10 +21,15 @@ export function firstDifference(a: History, b: History): string | null {
 function firstDifferentColumn(a: Columns, b: Columns): string | null {
   for (const name of new Set([...Object.keys(a), ...Object.keys(b)])) {
     if (name === 'length') continue;
-    if (a[name].length !== b[name].length) return `${name}: ${a[name].length} and ${b[name].length} elements`;
-    for (let row = 0; row < a[name].length; row++) {
-      if (!Object.is(a[name][row], b[name][row]))
-        return `${name}[${row}]: ${a[name][row]} and ${b[name][row]}`;
+    const ours = a[name];
+    const theirs = b[name];
+    if (ours === null || theirs === null) {
+      if (ours !== theirs) return `${name}: one is missing`;
+      continue;
+    }
+    if (ours.length !== theirs.length) return `${name}: ${ours.length} and ${theirs.length} elements`;
+    for (let row = 0; row < ours.length; row++) {
+      if (!Object.is(ours[row], theirs[row])) return `${name}[${row}]: ${ours[row]} and ${theirs[row]}`;
     }
   }
   return null;

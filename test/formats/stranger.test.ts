@@ -55,7 +55,7 @@ describe('a reader written from FORMATS.md alone', () => {
     const { length } = batch.steps;
     const boost = Float64Array.from({ length: 16 * length }, (_, k) => (k % 64 < 16 ? NaN : k / 7));
     batch.own.steps = {
-      boost: { values: boost, each: 16 },
+      matrix: { values: boost, each: 16 },
       count: { values: Int32Array.from({ length }, (_, k) => 1000 * k), each: 1 },
     };
     const bytes = await writeFile(sample, [batch]);
