@@ -1,8 +1,10 @@
 export {
   arrowRadii,
   type BallView,
+  type Box,
   ballDrawing,
   ballMarks,
+  boxesOf,
   CHAIN,
   endsOf,
   type KeyFold,
