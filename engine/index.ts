@@ -14,6 +14,8 @@ export {
 export {
   aliveEntries,
   type Beam,
+  BOOST_COLUMN,
+  BOOST_NUMBERS,
   CHANNELS,
   type ColourFault,
   type ColourLines,
@@ -23,6 +25,7 @@ export {
   colourFaults,
   coloursAlive,
   ENTRY_COLUMNS,
+  entriesAtEnd,
   type EntryTable,
   type EventHead,
   type FractionMeaning,

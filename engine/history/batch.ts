@@ -14,7 +14,7 @@ import {
 } from './columns.ts';
 import { type EventHead, joinHead, type SampleHead } from './head.ts';
 import type { History } from './history.ts';
-import { CHANNELS } from './schema.ts';
+import { BOOST_COLUMN, CHANNELS } from './schema.ts';
 
 /**
  * Events end to end in one set of columns: what the shower writes into and what a chunk of a file holds.
@@ -31,12 +31,13 @@ export class HistoryBatch {
   readonly stepStart: number[] = [0];
   readonly trialStart: number[] = [0];
   readonly entries: MutableEntries = makeEntries(1024);
-  readonly steps: MutableSteps = makeSteps(512);
+  readonly steps: MutableSteps;
   readonly trials: MutableTrials | null;
 
   constructor(sample: SampleHead, channels: readonly string[] = CHANNELS) {
     this.sample = sample;
     this.channels = [...channels];
+    this.steps = makeSteps(512, sample.columns.steps.includes(BOOST_COLUMN));
     this.trials = sample.columns.trials ? makeTrials(1024) : null;
   }
 

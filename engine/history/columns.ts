@@ -1,5 +1,5 @@
 import type { EntryTable, StepTable, TrialTable } from './history.ts';
-import { type ColumnSpec, ENTRY_COLUMNS, STEP_COLUMNS, TRIAL_COLUMNS } from './schema.ts';
+import { BOOST_NUMBERS, type ColumnSpec, ENTRY_COLUMNS, STEP_COLUMNS, TRIAL_COLUMNS } from './schema.ts';
 
 export type Column = Float64Array | Int32Array | Uint8Array;
 
@@ -72,6 +72,7 @@ class StepColumns implements MutableSteps {
   previous = NO_INTEGERS;
   noEmission = NO_FLOATS;
   generation = NO_INTEGERS;
+  boost: Float64Array | null = null;
 }
 
 class TrialColumns implements MutableTrials {
@@ -120,23 +121,34 @@ function viewTable<T extends AnyTable>(
 /** Empty tables whose columns have room for `capacity` rows. */
 export const makeEntries = (capacity: number): MutableEntries =>
   fillTable(new EntryColumns(), ENTRY_COLUMNS, capacity);
-export const makeSteps = (capacity: number): MutableSteps =>
-  fillTable(new StepColumns(), STEP_COLUMNS, capacity);
+export function makeSteps(capacity: number, withBoost = false): MutableSteps {
+  const steps: MutableSteps = fillTable(new StepColumns(), STEP_COLUMNS, capacity);
+  if (withBoost) steps.boost = new Float64Array(BOOST_NUMBERS * capacity);
+  return steps;
+}
 export const makeTrials = (capacity: number): MutableTrials =>
   fillTable(new TrialColumns(), TRIAL_COLUMNS, capacity);
 
 /** Widen the columns to at least `capacity` rows, keeping what they hold. */
 export const growEntries = (table: MutableEntries, capacity: number): void =>
   growTable(table, ENTRY_COLUMNS, capacity);
-export const growSteps = (table: MutableSteps, capacity: number): void =>
+export function growSteps(table: MutableSteps, capacity: number): void {
   growTable(table, STEP_COLUMNS, capacity);
+  if (table.boost === null || table.boost.length >= BOOST_NUMBERS * capacity) return;
+  const wider = new Float64Array(BOOST_NUMBERS * capacity);
+  wider.set(table.boost);
+  table.boost = wider;
+}
 export const growTrials = (table: MutableTrials, capacity: number): void =>
   growTable(table, TRIAL_COLUMNS, capacity);
 
 /** Rows start to end as a table that shares the memory. */
 export const viewEntries = (table: MutableEntries, start: number, end: number): EntryTable =>
   viewTable(new EntryColumns() as MutableEntries, table, ENTRY_COLUMNS, start, end);
-export const viewSteps = (table: MutableSteps, start: number, end: number): StepTable =>
-  viewTable(new StepColumns() as MutableSteps, table, STEP_COLUMNS, start, end);
+export function viewSteps(table: MutableSteps, start: number, end: number): StepTable {
+  const view = viewTable(new StepColumns() as MutableSteps, table, STEP_COLUMNS, start, end);
+  view.boost = table.boost?.subarray(BOOST_NUMBERS * start, BOOST_NUMBERS * end) ?? null;
+  return view;
+}
 export const viewTrials = (table: MutableTrials, start: number, end: number): TrialTable =>
   viewTable(new TrialColumns() as MutableTrials, table, TRIAL_COLUMNS, start, end);

@@ -45,6 +45,11 @@ export interface StepTable {
   readonly previous: Int32Array;
   readonly noEmission: Float64Array;
   readonly generation: Int32Array;
+  /**
+   * Lorentz transformation of every other entry at the step, BOOST_NUMBERS to a step, row by row in the order px py pz e,
+   * NaN where none; null where the history has no such column.
+   */
+  readonly boost: Float64Array | null;
 }
 
 /** One row per rejected trial; see schema.ts. */

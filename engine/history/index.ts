@@ -1,4 +1,5 @@
 export { HistoryBatch } from './batch.ts';
+export { entriesAtEnd } from './boosts.ts';
 export {
   type Column,
   growEntries,
@@ -35,6 +36,8 @@ export {
   stepAtTime,
 } from './replay.ts';
 export {
+  BOOST_COLUMN,
+  BOOST_NUMBERS,
   CHANNELS,
   type ColumnKind,
   type ColumnSpec,

@@ -71,6 +71,10 @@ export const STEP_COLUMNS = [
   ),
 ] as const;
 
+/** Name of the one step column that holds several numbers a row, and how many. */
+export const BOOST_COLUMN = 'boost';
+export const BOOST_NUMBERS = 16;
+
 export const TRIAL_COLUMNS = [
   column('before', 'row', '', 'the step that came next, or the number of steps'),
   column('t', 'float', 'unit of t', 'evolution variable of the rejected trial'),

@@ -1,7 +1,10 @@
 import { sinCos } from '../math/index.ts';
+import { transverseAxes } from './transverse-axes.ts';
 
-// scratch, not reentrant: sine and cosine of the azimuth
+// scratch, not reentrant: sine and cosine of the azimuth, two light-like momenta, two axes
 const turn = new Float64Array(2);
+const plane = new Float64Array(8);
+const axes = new Float64Array(8);
 
 /** lambda(a, b, c) = a^2 + b^2 + c^2 - 2ab - 2ac - 2bc, without its cancellation where a exceeds b and c. */
 export function kallen(a: number, b: number, c: number): number {
@@ -75,11 +78,9 @@ export function mapMassiveDipole(
   const px = p[emitter];
   const py = p[emitter + 1];
   const pz = p[emitter + 2];
-  const pe = p[emitter + 3];
   const qx = p[partner];
   const qy = p[partner + 1];
   const qz = p[partner + 2];
-  const qe = p[partner + 3];
   const total2 = q2 + mij2 + mk2;
   const after = kallen(total2, sij, mk2);
   if (!(after > 0)) return false;
@@ -106,65 +107,21 @@ export function mapMassiveDipole(
   const root = Math.sqrt(kallen(total2, mij2, mk2));
   const cl = (2 * mij2) / (q2 + root);
   const cm = (2 * mk2) / (q2 + root);
-  const lx = px - cl * qx;
-  const ly = py - cl * qy;
-  const lz = pz - cl * qz;
-  const le = pe - cl * qe;
-  const mx = qx - cm * px;
-  const my = qy - cm * py;
-  const mz = qz - cm * pz;
-  const me = qe - cm * pe;
+  for (let component = 0; component < 4; component++) {
+    const ij = p[emitter + component];
+    const k = p[partner + component];
+    plane[component] = ij - cl * k;
+    plane[4 + component] = k - cm * ij;
+  }
   // 2 l.m
   const plane2 = q2 * (1 + cl * cm) - 2 * cl * mk2 - 2 * cm * mij2;
-  const per = 2 / plane2;
-  const lengthX = 1 + 2 * per * lx * mx;
-  const lengthY = 1 + 2 * per * ly * my;
-  const lengthZ = 1 + 2 * per * lz * mz;
-  const dx = me * lx - le * mx;
-  const dy = me * ly - le * my;
-  const dz = me * lz - le * mz;
-  let length: number;
-  let nx = 0;
-  let ny = 0;
-  let nz = 0;
-  let tx = 0;
-  let ty = 0;
-  let tz = 0;
-  let lr: number;
-  let mr: number;
-  if (lengthZ >= lengthY && lengthZ >= lengthX) {
-    length = lengthZ;
-    lr = lz;
-    mr = mz;
-    nz = 1;
-    tx = dy;
-    ty = -dx;
-  } else if (lengthY >= lengthX) {
-    length = lengthY;
-    lr = ly;
-    mr = my;
-    ny = 1;
-    tx = -dz;
-    tz = dx;
-  } else {
-    length = lengthX;
-    lr = lx;
-    mr = mx;
-    nx = 1;
-    ty = dz;
-    tz = -dy;
-  }
-  nx += per * (mr * lx + lr * mx);
-  ny += per * (mr * ly + lr * my);
-  nz += per * (mr * lz + lr * mz);
+  transverseAxes(axes, plane, 0, 4, plane2);
   sinCos(turn, azimuth);
-  const scale = branching.kT / Math.sqrt(length);
-  const c = scale * turn[1];
-  const w = scale * turn[0] * per;
-
-  const kx = c * nx + w * tx;
-  const ky = c * ny + w * ty;
-  const kz = c * nz + w * tz;
+  const c = branching.kT * turn[1];
+  const w = branching.kT * turn[0];
+  const kx = c * axes[0] + w * axes[4];
+  const ky = c * axes[1] + w * axes[5];
+  const kz = c * axes[2] + w * axes[6];
   const partnerX = u * px + v * qx;
   const partnerY = u * py + v * qy;
   const partnerZ = u * pz + v * qz;

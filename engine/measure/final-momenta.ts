@@ -1,13 +1,14 @@
-import { type History, isAlive } from '../history/index.ts';
+import { entriesAtEnd, type History, isAlive } from '../history/index.ts';
 
 /**
- * Momenta of the final partons in row order.
+ * Momenta of the final partons in row order, with the transformations of global recoil applied.
  *
  * @param out memory to use again; its beginning is filled and returned where it is large enough.
  * @returns px, py, pz, E [GeV], four to a parton; incoming and resonance rows left out.
  */
 export function finalMomenta(history: History, out?: Float64Array): Float64Array {
-  const { entries, steps } = history;
+  const { steps } = history;
+  const entries = entriesAtEnd(history);
   const { px, py, pz, e, length } = entries;
   let partons = 0;
   for (let row = 0; row < length; row++) if (isAlive(entries, row, steps.length)) partons++;

@@ -1,5 +1,12 @@
 import { HBAR_C } from '../constants.ts';
-import { type History, KINDS, ROLES } from '../history/index.ts';
+import {
+  BOOST_NUMBERS,
+  type EntryTable,
+  entriesAtEnd,
+  type History,
+  KINDS,
+  ROLES,
+} from '../history/index.ts';
 import { angleBetween, atan2, log, momentum } from '../math/index.ts';
 import { fillBirthRows, hardBirthAngles, WIDEST } from './births.ts';
 import {
@@ -35,6 +42,7 @@ let bornAs = new Int32Array(256);
  */
 export function measureSteps(history: History, out?: StepMeasures): StepMeasures {
   const { entries, steps, head } = history;
+  const before = entriesAtEnd(history);
   const measures = out && out.capacity >= steps.length ? out : new StepMeasures(steps.length);
   measures.length = steps.length;
   if (bornAs.length < entries.length) bornAs = new Int32Array(2 * entries.length);
@@ -46,8 +54,8 @@ export function measureSteps(history: History, out?: StepMeasures): StepMeasures
 
   for (let step = 0; step < steps.length; step++) {
     const partner = steps.partner[step];
-    packRow(packed, EMITTER, entries, steps.emitter[step]);
-    packRow(packed, PARTNER, entries, partner);
+    packRow(packed, EMITTER, before, steps.emitter[step]);
+    packRow(packed, PARTNER, before, partner);
     packRow(packed, DAUGHTER, entries, steps.i[step]);
     packRow(packed, EMISSION, entries, steps.j[step]);
     const partnerRecoils = steps.recoiler[step] === partner;
@@ -64,7 +72,7 @@ export function measureSteps(history: History, out?: StepMeasures): StepMeasures
     nameSofter(measures, step, history);
     const birth = birthAngle(measures, step, history, hardAngles);
     measureCoherence(measures, step, birth, angleBetween(packed, packed, EMITTER, PARTNER));
-    measureRecoil(measures, step, history);
+    measureRecoil(measures, step, history, before);
   }
   return measures;
 }
@@ -147,14 +155,14 @@ function measureCoherence(m: StepMeasures, step: number, birth: number, partner:
 }
 
 /** Turn, loss and kick of emitter and recoiler, and the four-momentum that the step makes or loses. */
-function measureRecoil(m: StepMeasures, step: number, history: History): void {
+function measureRecoil(m: StepMeasures, step: number, history: History, before: EntryTable): void {
   const { steps, entries } = history;
   m.emitterTurn[step] = angleBetween(packed, packed, EMITTER, DAUGHTER);
   m.emitterEnergyLost[step] = 1 - packed[DAUGHTER + 3] / packed[EMITTER + 3];
   m.emitterKick[step] = crossLength(packed, EMITTER, DAUGHTER) / momentum(packed, EMITTER);
   const recoiler = steps.recoiler[step];
   const recoilerAfter = steps.recoilerAfter[step];
-  packRow(recoil, 0, entries, recoiler);
+  packRow(recoil, 0, before, recoiler);
   packRow(recoil, PACKED, entries, recoilerAfter);
   m.partnerTurn[step] = angleBetween(recoil, recoil, 0, PACKED);
   m.partnerEnergyLost[step] = 1 - recoil[PACKED + 3] / recoil[3];
@@ -164,6 +172,19 @@ function measureRecoil(m: StepMeasures, step: number, history: History): void {
     const taken = alone ? 0 : recoil[PACKED + c] - recoil[c];
     const branched = packed[DAUGHTER + c] - packed[EMITTER + c] + packed[EMISSION + c];
     m.residual[4 * step + c] += branched + taken;
+  }
+  if (steps.boost !== null && !Number.isNaN(steps.boost[BOOST_NUMBERS * step]))
+    addRecoilOfTheRest(m, step, steps.boost, history);
+}
+
+/** What all other partons gain where they recoil too: B R - R, R the event less the dipole. */
+function addRecoilOfTheRest(m: StepMeasures, step: number, boost: Float64Array, history: History): void {
+  const rest = [0, 0, 0, history.head.sqrtS];
+  for (let c = 0; c < 4; c++) rest[c] -= packed[EMITTER + c] + packed[PARTNER + c];
+  for (let c = 0; c < 4; c++) {
+    let moved = 0;
+    for (let d = 0; d < 4; d++) moved += boost[BOOST_NUMBERS * step + 4 * c + d] * rest[d];
+    m.residual[4 * step + c] += moved - rest[c];
   }
 }
 

@@ -53,7 +53,6 @@ export function recordStep(
   const emitterRow = state.row[emitter];
   const partnerRow = state.row[partner];
   const generation = state.generation[emitter];
-  const twicePiPj = y * (state.q2[dipole] - 2 * quarkMass * quarkMass);
   const w = state.emissionFraction(dipole, z, y, branching.kT, quarkMass);
   const j = state.branch(dipole, fromColourEnd, flavour, z, w, y, branching.azimuth, quarkMass);
 
@@ -78,7 +77,7 @@ export function recordStep(
   steps.y[at] = y;
   // beside a heavy partner the evolution variable is no transverse momentum: the true one is claimed
   steps.kT[at] = Number.isNaN(state.massiveKT) ? branching.kT : state.massiveKT;
-  steps.openingAngle[at] = claimedAngle(state, emitter, j, twicePiPj);
+  steps.openingAngle[at] = claimedAngle(state, emitter, j, y * state.shareQ2);
   steps.alphaS[at] = branching.alphaS;
   steps.emitter[at] = emitterRow;
   steps.partner[at] = partnerRow;
@@ -91,6 +90,7 @@ export function recordStep(
   steps.previous[at] = step - 1;
   steps.noEmission[at] = NaN;
   steps.generation[at] = generation;
+  if (steps.boost !== null) steps.boost.set(state.boost, 16 * at);
   steps.length = at + 1;
 }
 

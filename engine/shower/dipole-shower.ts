@@ -66,6 +66,7 @@ export class DipoleShower implements Grower, TrialListener {
     this.settings = settings;
     this.process = makeProcess(settings);
     this.firstEmission = makeFirstEmission(settings);
+    this.state.eventMass = settings.recoil === 'global' ? settings.energy : 0;
     this.sample = sampleHead(settings, this.process);
     this.sampler = new DipoleSampler(
       settings,

@@ -1,6 +1,8 @@
 import {
+  applyBoost,
   type MassiveBranching,
   mapDipole,
+  mapGlobalDipole,
   mapMassiveDipole,
   twiceDot,
   twiceDotMassive,
@@ -42,6 +44,12 @@ export class DipoleState {
   /** Dipoles whose q2 the last branching changed. */
   readonly touched = new Int32Array(4);
   touchedCount = 0;
+  /** Mass of the event, at rest, whose momenta all recoil [GeV]; 0: the partner alone does. */
+  eventMass = 0;
+  /** With global recoil: the transformation of all other momenta in the last branching, row by row, px py pz e. */
+  readonly boost = new Float64Array(16);
+  /** 2 (pi.pj + pi.pk + pj.pk) of the last branching [GeV^2]. */
+  shareQ2 = 0;
   /** Transverse momentum of the last branching [GeV] where a mass entered, NaN elsewhere: kT is then the shower's own. */
   massiveKT = NaN;
   private readonly massive: MassiveBranching = {
@@ -110,11 +118,33 @@ export class DipoleState {
     const emitter = fromColourEnd ? this.colourEnd[dipole] : this.anticolourEnd[dipole];
     const partner = fromColourEnd ? this.anticolourEnd[dipole] : this.colourEnd[dipole];
     const massive = this.mass[emitter] > 0 || this.mass[partner] > 0 || quarkMass > 0;
+    let partnerShare = 1 - y;
     // 2 (pi.pj + pi.pk + pj.pk): what y and z are shares of
-    const q2 = this.q2[dipole] - (flavour === 0 ? 0 : 2 * quarkMass * quarkMass);
+    let q2 = this.q2[dipole] - (flavour === 0 ? 0 : 2 * quarkMass * quarkMass);
     this.massiveKT = NaN;
-    if (massive) this.mapMassive(emitter, partner, this.q2[dipole], y * q2, quarkMass, z, azimuth);
+    if (this.eventMass > 0) {
+      const { after, boost, momenta } = this;
+      const rho = mapGlobalDipole(
+        after,
+        boost,
+        momenta,
+        4 * emitter,
+        4 * partner,
+        q2,
+        z,
+        w,
+        y,
+        azimuth,
+        this.eventMass,
+      );
+      const b = y / (z + w * y);
+      q2 *= rho * rho * (1 - w * b);
+      partnerShare = rho * (1 - b);
+      for (let slot = 0; slot < this.partons; slot++)
+        if (slot !== emitter && slot !== partner) applyBoost(momenta, 4 * slot, boost);
+    } else if (massive) this.mapMassive(emitter, partner, this.q2[dipole], y * q2, quarkMass, z, azimuth);
     else mapDipole(this.after, this.momenta, 4 * emitter, 4 * partner, q2, z, w, y, azimuth);
+    this.shareQ2 = q2;
     const j = this.newSlot(flavour === 0 ? 21 : -flavour, this.generation[emitter] + 1, quarkMass);
     if (flavour !== 0) this.mass[emitter] = quarkMass;
     this.placeMomenta(emitter, j, partner);
@@ -125,9 +155,9 @@ export class DipoleState {
     if (flavour === 0) this.insertGluon(dipole, fromColourEnd, emitter, j, q2, w, y);
     else this.splitGluon(dipole, fromColourEnd, emitter, j, flavour, q2, z, w, y);
     if (partnerOther >= 0 && partnerOther !== emitterOther) {
-      // a massless partner keeps its direction and loses the fraction y
+      // a massless partner keeps its direction and a share of its momentum
       if (massive) this.remeasure(partnerOther);
-      else this.setQ2(partnerOther, this.q2[partnerOther] * (1 - y));
+      else this.setQ2(partnerOther, this.q2[partnerOther] * partnerShare);
     }
     if (emitterOther >= 0) {
       // between two gluons that share both lines the splitting leaves either quark with the partner: known as well as

@@ -1,4 +1,10 @@
-import { ENTRY_COLUMNS, type SampleHead, STEP_COLUMNS, TRIAL_COLUMNS } from '../history/index.ts';
+import {
+  BOOST_COLUMN,
+  ENTRY_COLUMNS,
+  type SampleHead,
+  STEP_COLUMNS,
+  TRIAL_COLUMNS,
+} from '../history/index.ts';
 import type { HardProcess } from '../processes/index.ts';
 import { VERSION } from '../version.ts';
 import { describeSettings, type GrowSettings } from './settings.ts';
@@ -33,7 +39,10 @@ export function sampleHead(settings: GrowSettings, process: HardProcess): Sample
     columns: {
       entries: ENTRY_COLUMNS.map(({ name }) => name),
       // the probability of a gap takes a quadrature over the kernels, which the sampler does not do
-      steps: STEP_COLUMNS.map(({ name }) => name).filter((name) => name !== 'noEmission'),
+      steps: [
+        ...STEP_COLUMNS.map(({ name }) => name).filter((name) => name !== 'noEmission'),
+        ...(settings.recoil === 'global' ? [BOOST_COLUMN] : []),
+      ],
       trials: settings.trials ? TRIAL_COLUMNS.map(({ name }) => name) : null,
     },
   };

@@ -17,7 +17,7 @@ export interface GrowSettings {
   readonly seed: number;
   readonly shower: 'dipole';
   readonly order: 'kt' | 'virtuality';
-  readonly recoil: 'local';
+  readonly recoil: 'local' | 'global';
   readonly coupling: CouplingChoice;
   /** alpha_s at the Z mass; unused by a fixed coupling. */
   readonly alphasMz: number;
@@ -86,7 +86,13 @@ export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings 
   demand(PROCESSES.includes(all.process), 'process', all.process, 'ee, scalar-gg or scalar-bb');
   demand(all.shower === 'dipole', 'shower', all.shower, 'dipole');
   demand(all.order === 'kt' || all.order === 'virtuality', 'order', all.order, 'kt or virtuality');
-  demand(all.recoil === 'local', 'recoil', all.recoil, 'local');
+  demand(all.recoil === 'local' || all.recoil === 'global', 'recoil', all.recoil, 'local or global');
+  demand(
+    all.recoil === 'local' || !all.masses,
+    'recoil',
+    all.recoil,
+    'local where masses are on: the global map is massless',
+  );
   demand(typeof all.masses === 'boolean', 'masses', all.masses, 'on or off');
   demand(
     all.velocityFactors === 'unit' || all.velocityFactors === 'published',

@@ -20,7 +20,8 @@ describe('tables of columns', () => {
       [makeTrials(3), TRIAL_COLUMNS],
     ] as const;
     for (const [table, specs] of tables) {
-      expect(Object.keys(table).sort()).toEqual(['length', ...specs.map(({ name }) => name)].sort());
+      const others = specs === STEP_COLUMNS ? ['length', 'boost'] : ['length'];
+      expect(Object.keys(table).sort()).toEqual([...others, ...specs.map(({ name }) => name)].sort());
       for (const { name, kind } of specs) {
         const column = (table as unknown as Record<string, Float64Array>)[name];
         const type = kind === 'float' ? Float64Array : kind === 'word' ? Uint8Array : Int32Array;
@@ -31,7 +32,9 @@ describe('tables of columns', () => {
   });
 
   it('keep what a batch holds when it grows, and give its memory back empty when cleared', () => {
-    const grower = createGrower(resolveSettings({ energy: 2000, cutoff: 0.8, trials: true }));
+    const grower = createGrower(
+      resolveSettings({ energy: 2000, cutoff: 0.8, trials: true, recoil: 'global' }),
+    );
     const large = new HistoryBatch(grower.sample);
     for (let event = 0; event < 200; event++) grower.grow(large, event);
     expect(large.steps.length).toBeGreaterThan(1024);

@@ -18,6 +18,7 @@ const SAMPLES: Partial<GrowSettings>[] = [
   { process: 'scalar-gg', energy: 200, masses: true, firstEmission: 'kernel' },
   { quark: 5, energy: 300, masses: true, order: 'virtuality' },
   { energy: 91.1876, firstEmission: 'matched', cmw: true },
+  { energy: 300, recoil: 'global', process: 'scalar-gg' },
 ];
 
 function regrown(some: Partial<GrowSettings>, original: History, keep: number, stream: number): History {
