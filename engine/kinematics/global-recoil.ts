@@ -44,8 +44,9 @@ export function mapGlobalDipole(
   const a2 = q2 * (1 - w * b);
   // R = Q_tot - P with Q_tot at rest: A.R and R^2 from energies alone
   const ar = mass * (energy - kick[3]) - q2;
-  const rest2 = mass * mass - 2 * mass * energy + q2;
-  const rho = (-ar + Math.sqrt(ar * ar + a2 * (mass * mass - rest2))) / a2;
+  const open2 = 2 * mass * energy - q2;
+  // the root of A^2 rho^2 + 2 A.R rho = M^2 - R^2 in the form that does not cancel where the dipole is light
+  const rho = open2 / (ar + Math.sqrt(ar * ar + a2 * open2));
   for (let c = 0; c < 4; c++) {
     const ij = p[emitter + c];
     const k = p[partner + c];
