@@ -14,10 +14,19 @@ export interface CoherentComparison {
 
 const FEWEST = 25;
 
-/** Sample means of the engine and of the plain shower, `events` each, key by key. Colour partners are left out. */
-export function compareCoherent(settings: PlainSettings, seed: number, events: number): CoherentComparison[] {
+/**
+ * Sample means of the engine and of the plain shower, `events` each, key by key. Colour partners are left out.
+ *
+ * @param fault settings in which the engine is made to differ, to prove that it is noticed.
+ */
+export function compareCoherent(
+  settings: PlainSettings,
+  seed: number,
+  events: number,
+  fault: Partial<PlainSettings> = {},
+): CoherentComparison[] {
   const engine = new Observables(settings.energy);
-  for (const history of coherentEvents(settings, seed, events)) {
+  for (const history of coherentEvents({ ...settings, ...fault }, seed, events)) {
     const steps = measuredSteps(history).map((step) => ({ ...step, partnerAngle: NaN }));
     engine.add(momentaAfter(history, history.steps.length - 1), steps);
   }
@@ -55,7 +64,10 @@ export const COHERENT_SAMPLES: readonly { readonly name: string; readonly settin
   { name: 'massive b, fixed', settings: { ...HEAVY, ...FIXED, coherent: true } },
   { name: '1000 GeV, one loop', settings: { ...AT_Z, ...ONE_LOOP, energy: 1000, coherent: true } },
   { name: '1000 GeV, fixed', settings: { ...AT_Z, ...FIXED, energy: 1000, coherent: true } },
-  { name: '1000 GeV, massive b, one loop', settings: { ...HEAVY, ...ONE_LOOP, energy: 1000, coherent: true } },
+  {
+    name: '1000 GeV, massive b, one loop',
+    settings: { ...HEAVY, ...ONE_LOOP, energy: 1000, coherent: true },
+  },
   { name: '1000 GeV, massive b, fixed', settings: { ...HEAVY, ...FIXED, energy: 1000, coherent: true } },
   {
     name: 'scalar to gluons, masses on',

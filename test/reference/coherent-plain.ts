@@ -197,11 +197,7 @@ export class PlainCoherent {
     this.divide(twig, 1);
     const [b, c] = twig.daughters!;
     const { z } = twig.found;
-    this.settle(
-      b,
-      c,
-      () => (1 - z) * this.square(b) + z * this.square(c) > z * (1 - z) * this.square(twig),
-    );
+    this.settle(b, c, () => (1 - z) * this.square(b) + z * this.square(c) > z * (1 - z) * this.square(twig));
     this.descend(b);
     this.descend(c);
   }

@@ -13,7 +13,7 @@ describe.each(['kt', 'virtuality'] as const)('every step in %s ordering', (order
       flavours: 5,
       quark: 1,
     } as const;
-    const verdict = judgeEverySteps(settings, 301, 1200, order === 'kt' ? 100 : 40);
+    const verdict = judgeEverySteps(settings, 301, 800, order === 'kt' ? 60 : 20);
     for (const [name, p] of verdict) expect(p, name).toBeGreaterThan(1e-4);
     expect(verdict.size).toBeGreaterThanOrEqual(14);
   });

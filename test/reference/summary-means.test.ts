@@ -5,7 +5,7 @@ import { compareMeans, SAMPLES } from './summary-means.ts';
 // means in 7 samples: one of them beyond four by chance with probability 2 percent; the seeds are fixed.
 describe('the sample means', () => {
   it.each(SAMPLES)('agree with an independent shower: $name', ({ settings }) => {
-    const events = settings.energy > 500 ? 1500 : 6000;
+    const events = settings.energy > 500 ? 800 : 4000;
     let compared = 0;
     for (const { key, pull } of compareMeans(settings, 601, events)) {
       if (Number.isNaN(pull)) continue;
