@@ -20,10 +20,9 @@ import { asNumber, asText, decodeBlock, FieldError, Fields } from './fields.ts';
 import { FileBatch, OWN_TABLES, type OwnTable } from './file-batch.ts';
 import { fillColumn, type ReadColumn, readGroups } from './group-reader.ts';
 import type { FileHead } from './head-block.ts';
-import { mostOwnConstants, mostRows } from './layout.ts';
+import { MOST_EVENTS, mostOwnConstants, mostRows } from './layout.ts';
 import type { Block } from './read-block.ts';
 
-const MOST_EVENTS = 65536;
 const SPECS: Readonly<Record<OwnTable, readonly ColumnSpec[]>> = {
   entries: ENTRY_COLUMNS,
   steps: STEP_COLUMNS,
@@ -63,7 +62,8 @@ export class ChunkDecoder {
       const batch = new FileBatch(this.sample, channels.length > 0 ? channels : this.channels);
       batch.storedFirst = fields.integer('first');
       const columns = new Map<string, ReadColumn>();
-      for (const column of readGroups(fields, rows)) columns.set(`${column.table}.${column.name}`, column);
+      for (const column of readGroups(fields, rows, block.payload.length))
+        columns.set(`${column.table}.${column.name}`, column);
       readHeads(batch, fields, columns, events, number);
       const limit = { cells: mostOwnConstants(block.payload.length) };
       for (const table of OWN_TABLES) {

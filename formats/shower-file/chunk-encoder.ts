@@ -15,7 +15,7 @@ import { ChannelWords } from './channel-words.ts';
 import { type ChunkSummaries, summarise } from './event-summaries.ts';
 import { FileBatch, OWN_TABLES, type OwnTable, rowStarts } from './file-batch.ts';
 import { GroupWriter } from './group-writer.ts';
-import { MOST_CONSTANT, MOST_OWN_CONSTANT, mostRows, TAG_EVENTS } from './layout.ts';
+import { MOST_CONSTANT, MOST_OWN_CONSTANT, mostInflated, mostRows, TAG_EVENTS } from './layout.ts';
 
 /** A chunk ready for the file; a plain object, so that another thread can make it. */
 export interface EncodedChunk {
@@ -65,10 +65,12 @@ export class ChunkEncoder {
       }
       this.addTable(batch, table, starts[from], starts[to], channels);
     }
-    let packed = writer.finish();
+    let { columns, inflated } = writer.finish();
     // Rows that deflate to nearly nothing would look like a trap to a reader.
-    const bytes = packed.stored.length + packed.deflated.length;
-    if (Object.values(rows).some((count) => count > mostRows(bytes))) packed = writer.finish(true);
+    const bytes = columns.stored.length + columns.deflated.length;
+    const tooFew =
+      inflated > mostInflated(bytes) || Object.values(rows).some((count) => count > mostRows(bytes));
+    if (tooFew) ({ columns, inflated } = writer.finish(true));
     const unknown = batch instanceof FileBatch ? batch.unknown : {};
     const payload = encodeMessagePack({
       first,
@@ -76,7 +78,7 @@ export class ChunkEncoder {
       ...(channels.own && { channels: channels.own }),
       heads: batch.events.slice(from, to).map(packHead),
       rows,
-      ...packed,
+      ...columns,
       ...(unknown as Record<string, Packable>),
     });
     return {

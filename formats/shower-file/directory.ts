@@ -2,7 +2,7 @@ import { encodeMessagePack } from '../message-pack/index.ts';
 import { ShowerFileError } from '../shower-file-error.ts';
 import type { ByteSource } from '../sources/index.ts';
 import { decodeBlock, type UnknownKeys } from './fields.ts';
-import { FOOT_PAYLOAD_BYTES, PAGES_PER_DIRECTORY } from './layout.ts';
+import { BLOCK_HEAD_BYTES, FOOT_PAYLOAD_BYTES, MOST_EVENTS, PAGES_PER_DIRECTORY } from './layout.ts';
 import { readPlainColumn, writePlainColumn } from './plain-column.ts';
 import type { Block, BlockPlace } from './read-block.ts';
 
@@ -57,10 +57,17 @@ export function decodeIndexHead(source: ByteSource, block: Block): IndexHead {
       directoryBytes: fields.integer('directoryBytes'),
       pagesPerDirectory: fields.integer('pagesPerDirectory', 1),
     };
+    const fault = (found: string, expected: string) =>
+      new ShowerFileError('malformed-file', source.name, block.start, found, expected);
     const pages = Math.ceil(index.events / index.eventsPerPage);
     if (index.pages !== pages || index.eventsPerPage % index.eventsPerChunk !== 0) {
       const expected = `${pages} pages for ${index.events} events, and whole chunks to a page`;
-      throw new ShowerFileError('malformed-file', source.name, block.start, `${index.pages} pages`, expected);
+      throw fault(`${index.pages} pages`, expected);
+    }
+    // Every chunk takes some bytes before this block.
+    const chunks = Math.ceil(index.events / index.eventsPerChunk);
+    if (index.eventsPerChunk > MOST_EVENTS || chunks * BLOCK_HEAD_BYTES > block.start) {
+      throw fault(`${index.events} events in ${chunks} chunks`, `no more than ${block.start} bytes can hold`);
     }
     return { ...index, unknown: fields.unknown() };
   });

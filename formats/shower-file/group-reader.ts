@@ -1,11 +1,10 @@
 import { inflateSync } from 'fflate';
 import { ELEMENT_TYPES, type ElementType, widthOf } from './element-types.ts';
 import { asText, FieldError, Fields } from './fields.ts';
+import { mostInflated } from './layout.ts';
 import { gatherDoubles, gatherIntegers } from './shuffle.ts';
 
 const MOST_EACH = 4096;
-/** Deflate makes at most 1032 bytes of one. */
-const MOST_INFLATION = 1032;
 
 /** A column as it stands in a chunk. */
 export interface ReadColumn {
@@ -39,38 +38,47 @@ interface Group {
  * The columns of a chunk, from its groups and bytes.
  *
  * @param rows Rows of each table.
+ * @param bytes Length of the chunk's payload.
  * @throws FieldError where the groups and the bytes do not fit each other; nothing is inflated before that is known.
  */
-export function readGroups(chunk: Fields, rows: ReadonlyMap<string, number>): ReadColumn[] {
+export function readGroups(chunk: Fields, rows: ReadonlyMap<string, number>, bytes: number): ReadColumn[] {
   const groups = chunk.list('groups', (value, place) => readGroup(new Fields(value, place), rows));
   const stored = chunk.binary('stored');
   const deflated = chunk.binary('deflated');
   let storedBytes = 0;
   let looseBytes = 0;
   for (const group of groups) {
-    const bytes = group.length * group.names.length;
+    const size = group.length * group.names.length;
     for (let p = 0; p < widthOf(group.type); p++) {
-      if ((group.deflated >> p) & 1) looseBytes += bytes;
-      else storedBytes += bytes;
+      if ((group.deflated >> p) & 1) looseBytes += size;
+      else storedBytes += size;
     }
   }
   if (storedBytes !== stored.length) {
     throw new FieldError('stored', `${stored.length} bytes`, `${storedBytes} bytes, as the groups say`);
+  }
+  if (looseBytes > mostInflated(bytes)) {
+    const found = `${looseBytes} bytes to inflate, as the groups say`;
+    throw new FieldError(
+      'deflated',
+      found,
+      `${mostInflated(bytes)} at the most in a chunk of ${bytes} bytes`,
+    );
   }
   const loose = inflate(deflated, looseBytes);
   const columns: ReadColumn[] = [];
   let storedAt = 0;
   let looseAt = 0;
   for (const group of groups) {
-    const bytes = group.length * group.names.length;
+    const size = group.length * group.names.length;
     const planes: Uint8Array[] = [];
     for (let p = 0; p < widthOf(group.type); p++) {
       if ((group.deflated >> p) & 1) {
-        planes.push(loose.subarray(looseAt, looseAt + bytes));
-        looseAt += bytes;
+        planes.push(loose.subarray(looseAt, looseAt + size));
+        looseAt += size;
       } else {
-        planes.push(stored.subarray(storedAt, storedAt + bytes));
-        storedAt += bytes;
+        planes.push(stored.subarray(storedAt, storedAt + size));
+        storedAt += size;
       }
     }
     const { table, type, each, constant, length } = group;
@@ -108,9 +116,6 @@ function readGroup(fields: Fields, rows: ReadonlyMap<string, number>): Group {
 
 function inflate(stream: Uint8Array, length: number): Uint8Array {
   const expected = `a deflate stream of ${length} bytes, as the groups say`;
-  if (length > MOST_INFLATION * stream.length) {
-    throw new FieldError('deflated', `${stream.length} bytes, too few`, expected);
-  }
   let inflated: Uint8Array;
   try {
     // One byte more than expected shows a stream that goes on.

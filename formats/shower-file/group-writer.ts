@@ -56,11 +56,14 @@ export class GroupWriter {
   }
 
   /**
-   * The map entries that hold all columns: groups, stored and deflated bytes.
+   * The map entries that hold all columns: groups, stored and deflated bytes; and how many bytes the latter inflate to.
    *
    * @param storeAll Deflate nothing.
    */
-  finish(storeAll = false): { groups: Packable; stored: Uint8Array; deflated: Uint8Array } {
+  finish(storeAll = false): {
+    columns: { groups: Packable; stored: Uint8Array; deflated: Uint8Array };
+    inflated: number;
+  } {
     const groups: Packable[] = [];
     this.stored.length = 0;
     this.loose.length = 0;
@@ -68,7 +71,8 @@ export class GroupWriter {
     // A hash table of fixed size, as small as it goes: the library would take the size from Math.log, whose last digit
     // varies, and a larger one costs time and finds no more (measured, Node 20).
     const deflated = deflateSync(this.loose.bytes.subarray(0, this.loose.length), { level: 1, mem: 0 });
-    return { groups, stored: this.stored.bytes.subarray(0, this.stored.length), deflated };
+    const stored = this.stored.bytes.subarray(0, this.stored.length);
+    return { columns: { groups, stored, deflated }, inflated: this.loose.length };
   }
 
   private write(group: Group, storeAll: boolean): Packable {

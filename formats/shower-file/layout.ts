@@ -28,6 +28,9 @@ export const PAGES_PER_DIRECTORY = 128;
 export const FOOT_PAYLOAD_BYTES = 15;
 export const FOOT_BYTES = BLOCK_HEAD_BYTES + FOOT_PAYLOAD_BYTES;
 
+/** Most events of a chunk. */
+export const MOST_EVENTS = 65536;
+
 /**
  * Most rows of one table in a chunk whose payload has `bytes` bytes.
  *
@@ -35,6 +38,11 @@ export const FOOT_BYTES = BLOCK_HEAD_BYTES + FOOT_PAYLOAD_BYTES;
  */
 export function mostRows(bytes: number): number {
   return Math.min(65536 + 64 * bytes, 1 << 24);
+}
+
+/** Most bytes that the deflated columns of a chunk whose payload has `bytes` bytes may inflate to. */
+export function mostInflated(bytes: number): number {
+  return (1 << 20) + 64 * bytes;
 }
 
 /** Most elements of all constant columns of the author's own in a chunk whose payload has `bytes` bytes. */

@@ -34,7 +34,7 @@ export interface UnknownFileKeys {
  *
  * The bytes depend on head and events alone, not on the sizes of the batches; events are numbered in the order of writing. A
  * chunk is written as soon as its events are there, so a writer that is killed loses the events of the last chunk at most,
- * and its file is read up to there by `recover`. What is kept in memory does not grow but by twelve bytes per 1024 events.
+ * and its file is read up to there by `recover`. What is kept in memory grows by a few words for every 1024 events.
  *
  * Calls must not overlap: await each before the next. After an error the writer is of no use any more.
  */

@@ -61,3 +61,14 @@ export function withChanged(
   }
   throw new Error(`no block ${tag}`);
 }
+
+/** The payload of a foot. */
+export function craftFoot(start: number, bytes: number): Uint8Array {
+  const foot = Buffer.alloc(15);
+  foot[0] = 0x92;
+  foot[1] = 0xcf;
+  foot.writeBigUInt64BE(BigInt(start), 2);
+  foot[10] = 0xce;
+  foot.writeUInt32BE(bytes, 11);
+  return foot;
+}

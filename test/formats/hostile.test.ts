@@ -1,7 +1,7 @@
 import { deflateRawSync } from 'node:zlib';
 import { describe, expect, it } from 'vitest';
 import { bytesSource, recover, ShowerFileError, ShowerFileReader } from '../../formats/index.ts';
-import { blocksOf, craftBlock, withChanged } from './craft.ts';
+import { blocksOf, craftBlock, craftFoot, withChanged } from './craft.ts';
 import { CountingSource, writeFile } from './memory-file.ts';
 import { buildBatch, plainEvent, sampleHead } from './random-histories.ts';
 
@@ -16,8 +16,9 @@ type Chunk = Record<string, any>;
 
 /** The error of reading a chunk that was changed in this way. */
 async function errorOf(change: (chunk: Chunk) => void): Promise<ShowerFileError> {
-  const { reader } = await recover(bytesSource(withChanged(whole, 'evnt', change), 'hostile.shower'));
-  const error = await reader.event(0).catch((thrown: unknown) => thrown);
+  const { reader, reason } = await recover(bytesSource(withChanged(whole, 'evnt', change), 'hostile.shower'));
+  // A chunk that does not even say which events it holds counts as damage.
+  const error = reader.eventCount === 0 ? reason : await reader.event(0).catch((thrown: unknown) => thrown);
   if (!(error instanceof ShowerFileError)) throw new Error(`no ShowerFileError but ${String(error)}`);
   return error;
 }
@@ -27,6 +28,11 @@ const cases: readonly (readonly [string, (chunk: Chunk) => void, RegExp])[] = [
     'more rows than its bytes can mean',
     (c) => Object.assign(c.rows, { entries: 2 ** 30 }),
     /at the most.*rows\.entries/,
+  ],
+  [
+    'more events than a chunk may have',
+    (c) => Object.assign(c, { events: 2 ** 30 }),
+    /65536 at the most.*events: 1073741824/,
   ],
   ['rows that are no number', (c) => Object.assign(c.rows, { entries: 'many' }), /rows\.entries.*"many"/],
   ['counts that do not sum to the rows', (c) => c.rows.steps++, /./],
@@ -45,6 +51,15 @@ const cases: readonly (readonly [string, (chunk: Chunk) => void, RegExp])[] = [
     'a deflate stream that goes on',
     (c) => Object.assign(c, { deflated: deflateRawSync(Buffer.alloc(1e5)) }),
     /deflated.*more/,
+  ],
+  [
+    'columns that would inflate to gigabytes',
+    (c) => {
+      c.rows.entries = 60_000;
+      const columns = Array.from({ length: 5000 }, (_, k) => `c${k}`);
+      c.groups.push({ table: 'entries', type: 'f8', columns, deflated: 255 });
+    },
+    /at the most in a chunk.*bytes to inflate/,
   ],
   ['an unknown type', (c) => Object.assign(c.groups[0], { type: 'f2' }), /groups\[0\]\.type.*"f2"/],
   [
@@ -100,14 +115,25 @@ describe('a file whose lengths lie', () => {
     expect(source.bytes).toBeLessThan(10 * file.length);
   });
 
+  it('is refused where it cannot hold the events that it claims', async () => {
+    const parts = blocksOf(whole);
+    const index = parts.findIndex(({ tag }) => tag === 'indx');
+    const behind = withChanged(whole, 'indx', (map: Chunk) => {
+      map.events = 2 ** 50;
+      map.pages = 2 ** 40;
+    });
+    const start = 19 + parts.slice(0, index).reduce((sum, { payload }) => sum + 26 + payload.length, 0);
+    const foot = craftFoot(start, behind.length - start);
+    const file = Buffer.concat([behind, craftBlock('foot', foot)]);
+    await expect(ShowerFileReader.open(bytesSource(file, 'x'))).rejects.toMatchObject({
+      code: 'malformed-file',
+      found: `${2 ** 50} events in ${2 ** 44} chunks`,
+    });
+  });
+
   it('is refused where foot or directory point outside', async () => {
     const parts = blocksOf(whole).map(({ tag, payload }) => craftBlock(tag, payload));
-    const foot = Buffer.alloc(15);
-    foot[0] = 0x92;
-    foot[1] = 0xcf;
-    foot.writeBigUInt64BE(2n ** 60n, 2);
-    foot[10] = 0xce;
-    foot.writeUInt32BE(100, 11);
+    const foot = craftFoot(2 ** 52, 100);
     const file = Buffer.concat([whole.subarray(0, 19), ...parts.slice(0, -1), craftBlock('foot', foot)]);
     await expect(ShowerFileReader.open(bytesSource(file, 'x'))).rejects.toMatchObject({
       code: 'malformed-file',
