@@ -150,8 +150,10 @@ export class BallElement extends LitElement implements GestureTarget {
     const scene = this.#picture?.scene;
     if (!scene) return;
     this.#picture!.scene = null;
-    scene.dispose();
     const canvas = this.#part('canvas');
+    // Giving a context back loses it as well, which is told later.
+    canvas.removeEventListener('webglcontextlost', this.#lost);
+    scene.dispose();
     const fresh = canvas.cloneNode(false) as HTMLCanvasElement;
     canvas.replaceWith(fresh);
   }
@@ -169,8 +171,6 @@ export class BallElement extends LitElement implements GestureTarget {
   }
 
   readonly #lost = (): void => {
-    // A context that was given back on purpose is lost as well, but by then there is no scene.
-    if (!this.#picture?.scene) return;
     this.#closeScene();
     this.failure = new SceneError('that its context was lost').message;
   };
@@ -296,6 +296,11 @@ export class BallElement extends LitElement implements GestureTarget {
 
   get stage(): Stage {
     return this.#stage;
+  }
+
+  /** Where a step stands in the element [px], null where it does not. */
+  placeOf(step: number): { x: number; y: number } | null {
+    return this.#picture?.placeOf(step) ?? null;
   }
 
   /** Look from a camera, at once. */

@@ -1,11 +1,6 @@
 import { ContextProvider } from '@lit/context';
-import {
-  type GrowSettings,
-  growEvent,
-  type History,
-  measureSteps,
-  resolveSettings,
-} from '../../../engine/index.ts';
+import { type GrowSettings, growEvent, measureSteps, resolveSettings } from '../../../engine/index.ts';
+import { plain, widthOf } from '../../marks/index.ts';
 import { applyTheme, type EventFile, installTheme, Store, storeContext } from '../../state/index.ts';
 import { BallElement } from './ball.ts';
 
@@ -58,18 +53,27 @@ async function show(): Promise<void> {
   const least = number('least', 0);
   let event = number('event', 0);
   if (least > 0) while (growEvent(settings, event).steps.length < least) event++;
+  if (asked.has('silent')) while (growEvent(settings, event).steps.length > 0) event++;
   const nothing = { name: 'grown', size: async () => 0, read: async () => new Uint8Array() };
   await store.openSource(nothing, event, number('step', -1));
   const { playhead } = store;
   if (asked.has('time')) playhead.seek(number('time', 1) * playhead.end);
-  Object.assign(globalThis, { harness, store, ball: harness.querySelector('bl-ball') });
+  const page: HarnessPage = {
+    harness,
+    store,
+    ball: harness.querySelector('bl-ball')!,
+    widthOfRuns: (text, bold, size) => widthOf(plain(text, bold), size),
+  };
+  Object.assign(globalThis, page);
 }
 
 void show();
 
 /** What the harness leaves on the page for its tests. */
 export interface HarnessPage {
+  readonly harness: HTMLElement;
   readonly store: Store;
   readonly ball: BallElement;
-  readonly history?: History;
+  /** Width of plain text as the lettering reckons it [px]. */
+  widthOfRuns(text: string, bold: boolean, size: number): number;
 }
