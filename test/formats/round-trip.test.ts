@@ -46,7 +46,9 @@ describe('a file gives back', () => {
   it('an event of thousands of steps, of any bits, of plausible and of constant columns', async () => {
     const sample = sampleHead();
     for (const flavour of ['any', 'plausible', 'constant'] as const) {
-      const shape = { ...plainEvent(5), entries: 70_000, steps: 5000, trials: 3000, flavour };
+      // Above 65536 rows even a constant column is written out.
+      const entries = flavour === 'constant' ? 70_000 : 15_000;
+      const shape = { ...plainEvent(5), entries, steps: 5000, trials: 3000, flavour };
       await expectSame(sample, buildBatch(sample, [plainEvent(1), shape, plainEvent(2)]));
     }
   });
