@@ -18,7 +18,7 @@ import type { OwnColumn, OwnColumns } from '../shower-file/index.ts';
 export type JsonElement = number | string | null | (number | null)[];
 export type JsonTable = Record<string, JsonElement[]>;
 
-/** One event as JSON has it: see history-model "As JSON" in formats/FORMATS.md. */
+/** One event as an object: see "One event as JSON" in formats/FORMATS.md. */
 export interface JsonHistory {
   head: Head;
   entries: JsonTable;
