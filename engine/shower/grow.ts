@@ -1,10 +1,11 @@
 import { type History, HistoryBatch } from '../history/index.ts';
+import { CoherentShower } from './coherent/index.ts';
 import { DipoleShower, type Grower } from './dipole-shower.ts';
 import type { GrowSettings } from './settings.ts';
 
 /** A grower for these settings, which `resolveSettings` has completed. */
 export function createGrower(settings: GrowSettings): Grower {
-  return new DipoleShower(settings);
+  return settings.shower === 'coherent' ? new CoherentShower(settings) : new DipoleShower(settings);
 }
 
 /** One event with memory of its own. @param stream see Grower.grow. */

@@ -15,7 +15,10 @@ export interface GrowSettings {
   readonly energy: number;
   /** Integer, 0 to 2^53 - 1. */
   readonly seed: number;
-  readonly shower: 'dipole';
+  readonly shower: 'dipole' | 'coherent';
+  /** Of the coherent shower: false for the incoherent cascade. */
+  readonly coherence: boolean;
+  /** Of the dipole shower, as recoil and velocityFactors. */
   readonly order: 'kt' | 'virtuality';
   readonly recoil: 'local' | 'global';
   readonly coupling: CouplingChoice;
@@ -45,6 +48,7 @@ export const DEFAULT_SETTINGS: GrowSettings = {
   energy: 91.1876,
   seed: 1,
   shower: 'dipole',
+  coherence: true,
   order: 'kt',
   recoil: 'local',
   coupling: { kind: 'one-loop' },
@@ -84,7 +88,7 @@ function demand(holds: boolean, option: string, found: unknown, expected: string
 export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings {
   const all: GrowSettings = { ...DEFAULT_SETTINGS, ...some };
   demand(PROCESSES.includes(all.process), 'process', all.process, 'ee, scalar-gg or scalar-bb');
-  demand(all.shower === 'dipole', 'shower', all.shower, 'dipole');
+  demand(all.shower === 'dipole' || all.shower === 'coherent', 'shower', all.shower, 'dipole or coherent');
   demand(all.order === 'kt' || all.order === 'virtuality', 'order', all.order, 'kt or virtuality');
   demand(all.recoil === 'local' || all.recoil === 'global', 'recoil', all.recoil, 'local or global');
   demand(
@@ -160,7 +164,34 @@ export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings 
   );
   demandThreshold(all);
   demandMasslessFirstEmission(all);
+  demandOfShower(all);
   return all;
+}
+
+/** What one of the showers has and the other has not. */
+function demandOfShower(all: GrowSettings): void {
+  demand(typeof all.coherence === 'boolean', 'coherence', all.coherence, 'on or off');
+  if (all.shower === 'dipole') {
+    demand(all.coherence, 'coherence', 'off', 'on with --shower dipole: it is of --shower coherent');
+    return;
+  }
+  const ofDipole = (option: string, found: string, usual: string): void =>
+    demand(found === usual, option, found, `${usual} with --shower coherent: it is of --shower dipole`);
+  ofDipole('order', all.order, DEFAULT_SETTINGS.order);
+  ofDipole('recoil', all.recoil, DEFAULT_SETTINGS.recoil);
+  ofDipole('velocity-factors', all.velocityFactors, DEFAULT_SETTINGS.velocityFactors);
+  demand(
+    all.firstEmission === 'kernel',
+    'first-emission',
+    all.firstEmission,
+    'kernel with --shower coherent',
+  );
+  demand(
+    4 * all.cutoff < all.energy,
+    'cutoff',
+    all.cutoff,
+    `less than a quarter of the energy, ${all.energy / 4} GeV: the largest pT of the first branching`,
+  );
 }
 
 const PROCESSES: readonly string[] = ['ee', 'scalar-gg', 'scalar-bb'];
@@ -241,12 +272,14 @@ const QUARK_LETTERS = ['d', 'u', 's', 'c', 'b'] as const;
 /** Settings under their command-line names, as a history's head keeps them. Seed and sample size stand elsewhere. */
 export function describeSettings(settings: GrowSettings): Record<string, SettingValue> {
   const { coupling } = settings;
+  const dipole = settings.shower === 'dipole';
   return {
     process: settings.process,
     energy: settings.energy,
     shower: settings.shower,
-    order: settings.order,
-    recoil: settings.recoil,
+    ...(dipole
+      ? { order: settings.order, recoil: settings.recoil }
+      : { coherence: settings.coherence ? 'on' : 'off' }),
     coupling: coupling.kind === 'fixed' ? `fixed:${coupling.value}` : coupling.kind,
     'alphas-mz': settings.alphasMz,
     cmw: settings.cmw ? 'on' : 'off',
@@ -254,7 +287,7 @@ export function describeSettings(settings: GrowSettings): Record<string, Setting
     flavours: settings.flavours,
     quark: settings.quark === null ? null : QUARK_LETTERS[settings.quark - 1],
     masses: settings.masses ? 'on' : 'off',
-    'velocity-factors': settings.velocityFactors,
+    ...(dipole ? { 'velocity-factors': settings.velocityFactors } : {}),
     'first-emission': settings.firstEmission,
     trials: settings.trials,
   };

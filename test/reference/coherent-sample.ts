@@ -1,12 +1,17 @@
-import { type History, HistoryBatch, resolveSettings } from '../../engine/index.ts';
-import { CoherentShower } from '../../engine/shower/coherent/index.ts';
+import {
+  createGrower,
+  type Grower,
+  type History,
+  HistoryBatch,
+  resolveSettings,
+} from '../../engine/index.ts';
 import type { PlainSettings } from './coherent-plain.ts';
 
 export type CoherentSettings = Partial<PlainSettings>;
 
-function showerOf(some: CoherentSettings, seed: number): CoherentShower {
+function showerOf(some: CoherentSettings, seed: number): Grower {
   const { coherent = true, ...settings } = some;
-  return new CoherentShower(resolveSettings({ ...settings, seed }), coherent);
+  return createGrower(resolveSettings({ ...settings, seed, shower: 'coherent', coherence: coherent }));
 }
 
 /** How many of the events 0 to `count` have no step. */

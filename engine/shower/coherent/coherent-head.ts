@@ -5,8 +5,6 @@ import { describeSettings, type GrowSettings } from '../settings.ts';
 
 /** Columns that one-to-two branchings do not have. */
 const ABSENT = new Set(['y', 'recoiler', 'recoilerAfter', 'noEmission']);
-/** Settings of the dipole shower alone. */
-const FOREIGN = new Set(['order', 'recoil', 'velocity-factors']);
 
 /**
  * What all events of a sample of one-to-two branchings have in common.
@@ -15,11 +13,11 @@ const FOREIGN = new Set(['order', 'recoil', 'velocity-factors']);
  * the jet's axis; the azimuth's origin is the dipole shower's rule with the jet's basis vectors, see JetMomenta), kT and
  * openingAngle are generated, before the jets are reconstructed.
  *
- * @param coherent false: the incoherent cascade, t = q^2.
+ * The incoherent cascade has t = q^2 in the place of t = qt^2.
  */
-export function coherentHead(settings: GrowSettings, coherent: boolean, process: HardProcess): SampleHead {
+export function coherentHead(settings: GrowSettings, process: HardProcess): SampleHead {
+  const coherent = settings.coherence;
   const cutoff = settings.cutoff * settings.cutoff;
-  const described = Object.entries(describeSettings(settings)).filter(([name]) => !FOREIGN.has(name));
   return {
     seed: settings.seed,
     process: { name: settings.process, incoming: process.incoming },
@@ -40,11 +38,7 @@ export function coherentHead(settings: GrowSettings, coherent: boolean, process:
       openingAngle: 'own',
       angleFrame: 'event',
     },
-    shower: {
-      ...Object.fromEntries(described),
-      shower: 'coherent',
-      coherence: coherent ? 'on' : 'off',
-    },
+    shower: describeSettings(settings),
     producer: { name: 'branchlight', version: VERSION },
     columns: {
       entries: ENTRY_COLUMNS.map(({ name }) => name),

@@ -31,8 +31,8 @@ const ROOT_KEYS = 1;
  */
 export class CoherentShower implements Grower {
   readonly sample: SampleHead;
-  /** How often the last event was grown again. */
-  regrown = 0;
+  /** How often the present event was begun again. */
+  private regrown = 0;
   private readonly settings: GrowSettings;
   private readonly coherent: boolean;
   private readonly random = new Philox();
@@ -45,12 +45,12 @@ export class CoherentShower implements Grower {
   private readonly event: FinishedEvent;
   private readonly quarkMass = (flavour: number): number => (this.settings.masses ? quarkMass(flavour) : 0);
 
-  /** @param coherent false: the incoherent cascade. */
-  constructor(settings: GrowSettings, coherent: boolean) {
+  constructor(settings: GrowSettings) {
+    const coherent = settings.coherence;
     this.settings = settings;
     this.coherent = coherent;
     this.process = makeProcess(settings);
-    this.sample = coherentHead(settings, coherent, this.process);
+    this.sample = coherentHead(settings, this.process);
     this.log = settings.trials ? new TrialLog() : null;
     const sampler = new LineSampler({
       coupling: makeCoupling(settings),

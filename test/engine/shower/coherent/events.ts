@@ -1,20 +1,21 @@
 import {
+  createGrower,
   ENTRY_COLUMNS,
+  type Grower,
   type GrowSettings,
   type History,
   HistoryBatch,
   resolveSettings,
   STEP_COLUMNS,
 } from '../../../../engine/index.ts';
-import { CoherentShower } from '../../../../engine/shower/coherent/index.ts';
 
 /** Settings of this engine, and whether the cascade is coherent. */
 export interface Sample extends Partial<GrowSettings> {
   readonly coherent: boolean;
 }
 
-export const makeShower = ({ coherent, ...settings }: Sample): CoherentShower =>
-  new CoherentShower(resolveSettings(settings), coherent);
+export const makeShower = ({ coherent, ...settings }: Sample): Grower =>
+  createGrower(resolveSettings({ ...settings, shower: 'coherent', coherence: coherent }));
 
 /** One event with memory of its own. */
 export function coherentEvent(sample: Sample, stream: number): History {
