@@ -282,19 +282,20 @@ describe('files', () => {
       if (await ask(page, (app) => app.store!.state.eventMessage !== null)) damaged = event;
     }
     expect(damaged).toBeGreaterThan(0);
-    expect(await words(page.locator('bl-notice'))).toMatch(
+    expect(await words(page.locator('bl-notice div'))).toMatch(
       /could not be read[\s\S]*scratched\.shower, byte \d+: expected/,
     );
     await bench.look(page, 'damaged-event-1280');
     await page.evaluate(() => document.querySelector('bl-app')!.store!.openEvent(0));
     expect(await cardTitle()).toBe('Event 0');
+    expect(await words(page.getByRole('alert'))).toMatch(/scratched\.shower, byte \d+/);
   });
 
   test('that are something else are refused in words, not with a blank', async () => {
     page = await bench.open();
     await drop('notes.txt', Buffer.from('A page of notes, and no shower at all.'));
     await until(page, (app) => app.store!.state.source.status === 'failed');
-    const notice = page.locator('bl-notice');
+    const notice = page.locator('bl-notice div');
     expect(await words(notice)).toMatch(/notes\.txt could not be opened[\s\S]*notes\.txt, byte 0: expected/);
     expect(await page.locator('bl-ball').count()).toBe(0);
     await bench.look(page, 'foreign-1280');

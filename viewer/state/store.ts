@@ -133,7 +133,8 @@ export class Store {
   }
 
   /**
-   * Read an event and show it from its hard process on, or at rest on `step`. Where it cannot be read `eventMessage` says why.
+   * Read an event and show it from its hard process on, or at rest on `step`. Where it cannot be read `eventMessage` says why,
+   * and `source.message` from then on.
    *
    * @throws RangeError where the file has no such event; nothing changes then.
    */
@@ -145,19 +146,27 @@ export class Store {
     const question = ++this.#question;
     this.playhead.pause();
     this.#set({ event: n, eventMessage: null, hoverStep: -1 });
+    let history: History;
     try {
-      const history = await file.event(n);
-      if (question !== this.#question) return;
-      const measures = this.#parts.measure(history);
-      const { hardScale, tLow } = history.head;
-      this.playhead.load(measures.evolutionTime.subarray(0, history.steps.length), log(hardScale / tLow));
-      this.#set({ history, measures, step: -1 });
-      if (step >= 0 && step < history.steps.length) this.playhead.rest(step);
+      history = await file.event(n);
     } catch (error) {
       if (question !== this.#question) return;
+      const message = textOf(error);
+      const { source } = this.#state;
       this.playhead.load([], 0);
-      this.#set({ history: null, measures: null, step: -1, eventMessage: textOf(error) });
+      // From now on the reader knows that the file is damaged, whichever event is on the screen.
+      this.#set({
+        source: { ...source, message: source.message ?? message },
+        ...{ history: null, measures: null, step: -1, eventMessage: message },
+      });
+      return;
     }
+    if (question !== this.#question) return;
+    const measures = this.#parts.measure(history);
+    const { hardScale, tLow } = history.head;
+    this.playhead.load(measures.evolutionTime.subarray(0, history.steps.length), log(hardScale / tLow));
+    this.#set({ history, measures, step: -1 });
+    if (step >= 0 && step < history.steps.length) this.playhead.rest(step);
   }
 
   /** Select a step, −1 for none. A step that is still to come takes the clock along, so that it can be seen. */

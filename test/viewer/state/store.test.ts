@@ -125,6 +125,7 @@ describe('opening an event', () => {
     expect(store.state).toMatchObject({ event: 1, eventMessage: 'wrong checksum', history: null });
     await store.openEvent(2);
     expect(store.state).toMatchObject({ event: 2, eventMessage: null, history: histories[2] });
+    expect(store.state.source).toMatchObject({ status: 'ready', message: 'wrong checksum' });
   });
 
   test('refuses a number that the file lacks and changes nothing', async () => {

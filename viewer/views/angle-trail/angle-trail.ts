@@ -2,6 +2,7 @@ import { html, LitElement, nothing, svg } from 'lit';
 import { customElement, state } from 'lit/decorators.js';
 import { type Playhead, StoreSlice, stepNumber } from '../../state/index.ts';
 import { nearestStep } from '../clock/index.ts';
+import { releaseFocus } from '../frame/index.ts';
 import {
   controlStyles,
   drawingStyles,
@@ -28,7 +29,7 @@ import {
   trailPositions,
 } from './trail-plot.ts';
 
-const LEFT = 34;
+const LEFT = 42;
 const TOP = 8;
 const FOOT = 22;
 
@@ -185,6 +186,7 @@ export class AngleTrailElement extends LitElement {
 
   #counts() {
     const { coherenceBirth, coherencePartner, length } = this.#measures.value!;
+    if (length === 0) return html`no branching in this event`;
     const birth = aboveText(countAbove(coherenceBirth, length));
     const partner = aboveText(countAbove(coherencePartner, length));
     return html`above birth ${birth}, above partner ${partner}, this event`;
@@ -222,7 +224,7 @@ export class AngleTrailElement extends LitElement {
         ${this.#bands(pitch, height)}
         ${axis.ticks.map(
           ({ angle, label }) => svg`<path class="grid" d="M0 ${y(angle)}H${width}" />
-            <text x="-8" y=${y(angle) + 4} text-anchor="end">${label}</text>`,
+            <text x="-8" y=${y(angle) + 4} text-anchor="end">${notationSpans(label, 12.5)}</text>`,
         )}
         <path class="axis" d="M0 ${height}H${width}" />
         ${this.#numbers(width, height)}
@@ -351,11 +353,15 @@ export class AngleTrailElement extends LitElement {
     if (step >= 0) this.#history.store?.selectStep(step);
   };
   readonly #choose = (event: Event): void => {
-    const { value } = event.target as HTMLSelectElement;
+    const select = event.target as HTMLSelectElement;
+    const { value } = select;
     this.choice = value === 'all' || value === 'selected' ? value : Number(value);
+    releaseFocus(select);
   };
   readonly #turn = (event: Event): void => {
-    this.along = (event.target as HTMLSelectElement).value === 'time' ? 'time' : 'step';
+    const select = event.target as HTMLSelectElement;
+    this.along = select.value === 'time' ? 'time' : 'step';
+    releaseFocus(select);
   };
 }
 

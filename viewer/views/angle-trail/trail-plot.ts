@@ -1,6 +1,6 @@
 import type { History, StepMeasures } from '../../../engine/index.ts';
 import { log } from '../../../engine/math/index.ts';
-import { partonSymbol } from '../type/index.ts';
+import { partonSymbol, shortNumber } from '../type/index.ts';
 
 /** A logarithmic angle axis from `low` to `high` [rad], `high` at the top. */
 export interface AngleAxis {
@@ -50,7 +50,7 @@ export function angleAxis(angles: readonly ArrayLike<number>[], height: number):
 const LINE = 13;
 
 const angleLabel = (angle: number): string =>
-  angle >= 1e-3 ? String(angle) : angle.toExponential(0).replace('-', '−');
+  angle >= 1e-3 ? String(angle) : shortNumber(Number(angle.toPrecision(1)));
 
 /** Place of an angle on an axis of so many pixels, from the top; angles off the axis lie at its end. */
 export function angleHeight(axis: { low: number; high: number }, angle: number, height: number): number {

@@ -121,7 +121,7 @@ export class CardElement extends LitElement {
     const label = `${plainNotation(symbol)} ${plainNotation(name)}`.trim();
     return html`<tr class="${differs ? 'differs chosen' : ''} ${extra ? 'extra' : ''}" data-key=${key} @mouseenter=${explain} @mouseleave=${this.#stopExplaining}>
       <th scope="row">
-        <button type="button" class="term" title=${row.definition} @focus=${explain} @blur=${this.#stopExplaining}
+        <button type="button" class="term" @focus=${explain} @blur=${this.#stopExplaining}
           @click=${() => this.#copy(`${label}\t${claimed}\t${measured}\t${plainNotation(unit)}`, label)}
         >${notation(symbol)}<span class="unseen"> ${plainNotation(name)}: copy claimed and measured</span></button>
       </th>

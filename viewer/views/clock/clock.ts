@@ -2,7 +2,7 @@ import { html, LitElement, nothing, type PropertyValues, svg } from 'lit';
 import { customElement, state } from 'lit/decorators.js';
 import { live } from 'lit/directives/live.js';
 import { type Playhead, SPEEDS, StoreSlice, stepNumber } from '../../state/index.ts';
-import { BoxSize } from '../frame/index.ts';
+import { BoxSize, releaseFocus } from '../frame/index.ts';
 import {
   channelNotation,
   controlStyles,
@@ -282,7 +282,9 @@ export class ClockElement extends LitElement {
   }
 
   readonly #changeSpeed = (event: Event): void => {
-    if (this.#playhead) this.#playhead.speed = Number((event.target as HTMLSelectElement).value);
+    const select = event.target as HTMLSelectElement;
+    if (this.#playhead) this.#playhead.speed = Number(select.value);
+    releaseFocus(select);
   };
 
   #placeOf(event: PointerEvent): number {

@@ -2,6 +2,7 @@ import { html, LitElement, nothing, type PropertyValues, svg } from 'lit';
 import { customElement, state } from 'lit/decorators.js';
 import { ifDefined } from 'lit/directives/if-defined.js';
 import { type EventFile, StoreSlice } from '../../state/index.ts';
+import { releaseFocus } from '../frame/index.ts';
 import {
   controlStyles,
   countText,
@@ -268,7 +269,9 @@ export class EventsElement extends LitElement {
   }
 
   readonly #chooseKey = (event: Event): void => {
-    this.key = (event.target as HTMLSelectElement).value as OrderKey;
+    const select = event.target as HTMLSelectElement;
+    this.key = select.value as OrderKey;
+    releaseFocus(select);
     this.falling = this.key !== 'event';
     void this.#sort();
   };

@@ -1,1 +1,2 @@
 export { BoxSize } from './box-size.ts';
+export { releaseFocus } from './release-focus.ts';
