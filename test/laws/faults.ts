@@ -12,10 +12,10 @@ interface Copy {
 type Fault = (copy: Copy) => boolean;
 
 function copyTable<T extends { length: number }>(table: T): T {
-  const columns = table as unknown as Record<string, number | Int32Array | Float64Array | Uint8Array>;
+  const columns = table as unknown as Record<string, number | null | Int32Array | Float64Array | Uint8Array>;
   const copies = Object.entries(columns).map(([name, column]) => [
     name,
-    typeof column === 'number' ? column : column.slice(),
+    typeof column === 'number' || column === null ? column : column.slice(),
   ]);
   return Object.fromEntries(copies) as T;
 }

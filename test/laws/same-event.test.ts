@@ -12,7 +12,9 @@ function bits(history: History): unknown {
       ? null
       : Object.entries(rows).map(([name, column]) => [
           name,
-          typeof column === 'number' ? column : [...new Uint8Array(column.slice().buffer)].join(),
+          typeof column === 'number' || column === null
+            ? column
+            : [...new Uint8Array(column.slice().buffer)].join(),
         ]);
   const { head, entries, steps, trials, channels } = history;
   return { head, channels, entries: table(entries), steps: table(steps), trials: table(trials) };
