@@ -72,6 +72,8 @@ describe('random numbers keyed by seed, event, step and draw', () => {
     expect(BIT_SAMPLES.map((sample) => eventBits(sample, 1000))).toEqual([
       'd8571fcdaad7c217',
       '5c138ab44db518b5',
+      '8d8fb0799dde473f',
+      'c61943086f0e2420',
     ]);
   });
 });

@@ -46,4 +46,13 @@ function hashHistory(lanes: Uint32Array, history: History): void {
 export const BIT_SAMPLES: readonly Partial<GrowSettings>[] = [
   { seed: 1 },
   { seed: 2, energy: 1000, order: 'virtuality', coupling: { kind: 'two-loop' } },
+  { seed: 3, shower: 'coherent', energy: 1000, masses: true },
+  {
+    seed: 4,
+    shower: 'coherent',
+    coherence: false,
+    process: 'scalar-gg',
+    energy: 300,
+    coupling: { kind: 'two-loop' },
+  },
 ];
