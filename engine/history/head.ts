@@ -100,6 +100,7 @@ export interface EventHead {
 
 /** Keys that heads have where their authors added none. */
 const SAMPLE_KEYS = 13;
+const PROCESS_KEYS = 2;
 const EVENT_KEYS = 8;
 
 /**
@@ -108,7 +109,11 @@ const EVENT_KEYS = 8;
  * Written out key by key where there are no others: spreading two objects took longer than growing the event.
  */
 export function joinHead(sample: SampleHead, event: EventHead): Head {
-  if (Object.keys(sample).length !== SAMPLE_KEYS || Object.keys(event).length !== EVENT_KEYS) {
+  const others =
+    Object.keys(sample).length - SAMPLE_KEYS ||
+    Object.keys(sample.process).length - PROCESS_KEYS ||
+    Object.keys(event).length - EVENT_KEYS;
+  if (others !== 0) {
     const { outgoing, ...own } = event;
     return { ...sample, ...own, process: { ...sample.process, outgoing } };
   }
@@ -120,7 +125,7 @@ export function joinHead(sample: SampleHead, event: EventHead): Head {
     rerun: event.rerun,
     status: event.status,
     statusReason: event.statusReason,
-    process: { ...sample.process, outgoing: event.outgoing },
+    process: { name: sample.process.name, incoming: sample.process.incoming, outgoing: event.outgoing },
     beams: sample.beams,
     sqrtS: sample.sqrtS,
     weight: event.weight,

@@ -1,4 +1,5 @@
 import { type EngineFigures, engineTable } from './engine.ts';
+import { type FileFigures, fileBench } from './file.ts';
 import { type StartFigures, startTable } from './start-up.ts';
 
 function printEngine(rows: readonly EngineFigures[]): void {
@@ -27,8 +28,31 @@ function printStart(rows: readonly StartFigures[]): void {
     console.log(`${ms.toFixed(0).padStart(6)} ms ${ratio.toFixed(2).padStart(6)}   ${words}`);
 }
 
+function printFile(rows: readonly FileFigures[]): void {
+  console.log('native file in memory, one thread, fastest round');
+  const heads = ['written/s', 'read/s', 'mended/s', 'write/grow', 'bytes/event', 'open ms', 'event ms'];
+  console.log(heads.map((head) => head.padStart(13)).join(''));
+  for (const row of rows) {
+    const figures = [
+      row.writtenPerSecond.toFixed(0),
+      row.readPerSecond.toFixed(0),
+      row.recoveredPerSecond.toFixed(0),
+      row.writeOverGrow.toFixed(2),
+      row.fileBytesPerEvent.toFixed(0),
+      row.openMs.toFixed(2),
+      row.eventMs.toFixed(2),
+    ];
+    console.log(`${figures.map((figure) => figure.padStart(13)).join('')}   ${row.label}`);
+  }
+}
+
 const parts: Record<string, () => void | Promise<void>> = {
   engine: () => printEngine(engineTable()),
+  file: async () =>
+    printFile([
+      await fileBench('91.1876 GeV', {}, 6400),
+      await fileBench('1000 GeV, trials', { energy: 1000, trials: true }, 1280),
+    ]),
   'start-up': () => printStart(startTable()),
 };
 
