@@ -1,6 +1,6 @@
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { HarnessPage } from '../../viewer/views/ball/harness.ts';
+import type { HarnessPage } from '../../viewer/views/ball/index.ts';
 import { BallServer, settle } from './ball-page.ts';
 
 const server = new BallServer();

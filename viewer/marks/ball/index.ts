@@ -7,11 +7,12 @@ export {
 } from './arrow-marks.ts';
 export { CHAIN } from './chain-marks.ts';
 export { endsOf, RING, RING_DASH, RING_PIECES, TIP_LENGTH, turnPath, washShares } from './cone-marks.ts';
-export { type KeyFold, keyPitch, keysFit, momentText, stepName } from './corners.ts';
+export { momentText, stepName } from './corners.ts';
 export { ballDrawing, ballMarks } from './drawing.ts';
 export { netLines, SHELL_GAP } from './ground.ts';
+export { type KeyFold, keyPitch, keysFit } from './keys.ts';
+export { boxesOf } from './label.ts';
 export {
-  boxesOf,
   type LabelOptions,
   type Lettering,
   letter,

@@ -18,12 +18,13 @@ export interface LabelWish {
   readonly height: number;
   /** A wish that must be met takes the least bad place where no free one is left (labels still never overlap). */
   readonly must?: boolean;
+  /** May stand farther out where there is no room near the mark. */
+  readonly far?: boolean;
   /** Stands on its mark, in the middle, or nowhere. */
   readonly centred?: boolean;
 }
 
-/** Places that are tried about a mark, in order of preference: right, left, above, below, then the corners. */
-export const PLACES = [
+const AROUND = [
   [1, 0],
   [0.8, -0.8],
   [0, 1],
@@ -33,6 +34,18 @@ export const PLACES = [
   [-0.8, -0.8],
   [-0.8, 0.8],
 ] as const;
+
+/**
+ * Places that are tried about a mark, in order of preference: right, upper right, below, above, left, then the other corners, as
+ * multiples of the clearance; after those the same farther out, for labels that may lead a line to their mark.
+ */
+export const PLACES: readonly (readonly [number, number])[] = [
+  ...AROUND,
+  ...AROUND.map(([x, y]) => [2.6 * x, 2.6 * y] as const),
+];
+
+/** Whether a place is far enough from the mark to need a line to it. */
+export const isFar = (at: number): boolean => at >= AROUND.length;
 
 const CELL = 4;
 
@@ -146,8 +159,8 @@ export function placeLabels(
     const kept = before.get(wish.key);
     let least = wish.must ? Infinity : MOST_INK * cells;
     let best = -1;
-    for (let at = 0; at < (wish.centred ? 1 : PLACES.length); at++) {
-      const cost = grid.cost(boxAt(wish, at)) + (kept === at ? -4 : 0.3 * at);
+    for (let at = 0; at < (wish.centred ? 1 : wish.far ? PLACES.length : AROUND.length); at++) {
+      const cost = grid.cost(boxAt(wish, at)) + (kept === at ? -4 : 0.3 * at + (isFar(at) ? 5 : 0));
       if (cost >= least) continue;
       least = cost;
       best = at;

@@ -150,6 +150,6 @@ export class BallPicture {
 
   #letterClock(): void {
     if (!this.#scene) this.#overlay.draw('ball', ballMarks(this.#plate!));
-    this.#overlay.draw('clock', letterClock(this.#plate!, true));
+    this.#overlay.draw('clock', letterClock(this.#plate!, this.#places));
   }
 }

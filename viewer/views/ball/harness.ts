@@ -3,6 +3,7 @@ import { type GrowSettings, growEvent, measureSteps, resolveSettings } from '../
 import { plain, widthOf } from '../../marks/index.ts';
 import { applyTheme, type EventFile, installTheme, Store, storeContext } from '../../state/index.ts';
 import { BallElement } from './ball.ts';
+import type { HarnessPage } from './harness-page.ts';
 
 /** Events grown on the spot, behind the interface of an open file. */
 function grownFile(settings: GrowSettings): EventFile {
@@ -68,12 +69,3 @@ async function show(): Promise<void> {
 }
 
 void show();
-
-/** What the harness leaves on the page for its tests. */
-export interface HarnessPage {
-  readonly harness: HTMLElement;
-  readonly store: Store;
-  readonly ball: BallElement;
-  /** Width of plain text as the lettering reckons it [px]. */
-  widthOfRuns(text: string, bold: boolean, size: number): number;
-}

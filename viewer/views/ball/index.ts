@@ -1,1 +1,2 @@
 export { BallElement } from './ball.ts';
+export type { HarnessPage } from './harness-page.ts';
