@@ -164,6 +164,18 @@ describe('one selection', () => {
     expect(Number(await page.evaluate(() => navigator.clipboard.readText()))).toBe(claimed);
   });
 
+  test('the event’s own command makes the same event again', async () => {
+    page = await bench.open('#event=28');
+    const command = (await words(page.locator('bl-card code'))).replace(
+      'again.shower',
+      bench.path('again.shower'),
+    );
+    branchlight(...command.split(' ').slice(1), '--quiet');
+    const show = (file: string) =>
+      JSON.parse(branchlight('show', bench.path(file), '--event', '28', '--json'));
+    expect(show('again.shower')).toEqual(show('demo.shower'));
+  });
+
   test('the trail shows one parton line when asked to', async () => {
     page = await bench.open('#event=28');
     const choice = page.locator('bl-angle-trail select').first();

@@ -18,9 +18,12 @@ const ARGUMENTS = [
   ...['--use-gl=angle', '--use-angle=swiftshader', '--enable-unsafe-swiftshader'],
 ];
 
-/** Run the command line to its end. */
-export function branchlight(...words: string[]): void {
-  execFileSync(process.execPath, [program, ...words], { stdio: ['ignore', 'ignore', 'inherit'] });
+/** Run the command line to its end. @returns what it printed. */
+export function branchlight(...words: string[]): string {
+  return execFileSync(process.execPath, [program, ...words], {
+    stdio: ['ignore', 'pipe', 'inherit'],
+    encoding: 'utf8',
+  });
 }
 
 /** A sample, the server on it and a browser: what every test of the workbench works with. */

@@ -4,6 +4,7 @@ import { type History, measureSteps } from '../../../engine/index.ts';
 import {
   eventRows,
   momentumTable,
+  rerunCommand,
   showerNotation,
   stepRows,
   valuesDiffer,
@@ -128,5 +129,15 @@ describe('head of an event', () => {
     for (const name of Object.keys(histories[0].head.shower))
       expect(rows.some((row) => row.name === name)).toBe(true);
     expect(rows.find(({ name }) => name === 'cutoff')?.value).toBe('1 GeV');
+  });
+
+  test('has the command that makes it again, of what differs from the defaults', () => {
+    expect(rerunCommand(histories[0].head)).toBe(
+      `branchlight grow --energy 1000 --quark d --seed 7 --events ${histories[0].head.stream! + 1} --out again.shower`,
+    );
+    const { head } = histories[0];
+    expect(rerunCommand({ ...head, rerun: 'make event-7' })).toBe('make event-7');
+    expect(rerunCommand({ ...head, producer: { name: 'another', version: '2' } })).toBeNull();
+    expect(rerunCommand({ ...head, seed: null })).toBeNull();
   });
 });

@@ -29,6 +29,12 @@ export const appStyles = css`
     min-height: 0;
     padding-top: 8px;
   }
+  .centre.alone {
+    grid-column: centre / right;
+  }
+  :host([list-open]) .centre.alone {
+    grid-column: centre;
+  }
   bl-ball,
   bl-notice {
     min-width: 0;

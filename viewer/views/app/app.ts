@@ -116,9 +116,9 @@ export class AppElement extends LitElement {
     `;
   }
 
-  #notice({ source, eventMessage }: ViewerState) {
+  #notice({ source, event, eventMessage }: ViewerState) {
     const notice = (kind: string, message = '') =>
-      html`<bl-notice kind=${kind} name=${source.name} .message=${message} @bl-command=${this.#command}></bl-notice>`;
+      html`<bl-notice kind=${kind} name=${source.name} .event=${event} .message=${message} @bl-command=${this.#command}></bl-notice>`;
     if (source.status === 'empty') return notice('empty');
     if (source.status === 'failed') return notice('failed', source.message ?? '');
     if (eventMessage !== null) return notice('event-failed', eventMessage);

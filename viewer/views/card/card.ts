@@ -19,6 +19,7 @@ import {
 import { cardStyles } from './card.styles.ts';
 import { eventRows } from './event-rows.ts';
 import { type MomentumRow, momentumTable } from './momentum-rows.ts';
+import { rerunCommand } from './rerun-command.ts';
 import { type StepRow, stepRows } from './step-rows.ts';
 
 /**
@@ -53,7 +54,7 @@ export class CardElement extends LitElement {
   #event() {
     const history = this.#history.value!;
     const partons = aliveEntries(history, history.steps.length).length;
-    const { rerun } = history.head;
+    const rerun = rerunCommand(history.head);
     return html`
       <header>
         <h2>Event ${countText(history.head.event)}</h2>
@@ -67,7 +68,7 @@ export class CardElement extends LitElement {
         ${
           rerun
             ? html`<div class="again">
-                <span class="unit">again</span><code>${rerun}</code>
+                <span class="unit">make again</span><code>${rerun}</code>
                 <button type="button" @click=${() => this.#copy(rerun, 'command')}>copy</button>
               </div>`
             : nothing

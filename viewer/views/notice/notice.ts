@@ -53,6 +53,8 @@ export class NoticeElement extends LitElement {
   @property() kind: 'empty' | 'loading' | 'failed' | 'event-failed' | 'no-events' = 'empty';
   @property() name = '';
   @property() message = '';
+  /** Number of the event that could not be read. */
+  @property({ type: Number }) event = -1;
 
   override render() {
     return html`<div role=${this.kind.endsWith('failed') ? 'alert' : 'status'}>${this.#content()}</div>`;
@@ -65,7 +67,7 @@ export class NoticeElement extends LitElement {
       case 'failed':
         return html`<h2>${this.name} could not be opened</h2><p>${this.message}</p>${this.#open('Open another file')}`;
       case 'event-failed':
-        return html`<h2>This event could not be read</h2><p>${this.message}</p><p>The other events of ${this.name} can still be chosen.</p>`;
+        return html`<h2>Event ${this.event} could not be read</h2><p>${this.message}</p><p>The other events of ${this.name} can still be chosen.</p>`;
       case 'no-events':
         return html`<h2>${this.name} holds no events</h2>${this.#open('Open another file')}`;
       default:
