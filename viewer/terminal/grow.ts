@@ -36,9 +36,16 @@ const options = {
   energy: number('GeV', { purpose: 'centre-of-mass energy', otherwise: energy }),
   events: integer(1, MOST, { purpose: 'number of events', otherwise: 1000 }),
   seed: integer(0, MOST, { purpose: 'event n of a seed is always the same history', otherwise: seed }),
-  shower: oneOf(['dipole'], { purpose: 'kind of shower', otherwise: 'dipole' }),
-  order: oneOf(['kt', 'virtuality'], { purpose: 'evolution variable', otherwise: 'kt' }),
-  recoil: oneOf(['local'], { purpose: 'who takes the recoil: the colour partner', otherwise: 'local' }),
+  shower: oneOf(['dipole', 'coherent'], { purpose: 'kind of shower', otherwise: 'dipole' }),
+  order: oneOf(['kt', 'virtuality'], { purpose: 'evolution variable of the dipole shower', otherwise: 'kt' }),
+  coherence: oneOf(['on', 'off'], {
+    purpose: 'whether angles fall along the coherent shower',
+    otherwise: 'on',
+  }),
+  recoil: oneOf(['local', 'global'], {
+    purpose: 'who takes the recoil in the dipole shower: the colour partner, or all',
+    otherwise: 'local',
+  }),
   coupling: custom(
     'fixed:VALUE | one-loop | two-loop',
     { purpose: 'strong coupling', otherwise: 'one-loop' },
@@ -46,7 +53,7 @@ const options = {
   ),
   'alphas-mz': number('', { purpose: 'strong coupling at the Z mass, where it runs', otherwise: alphasMz }),
   cmw: oneOf(['on', 'off'], { purpose: 'coupling in the physical scheme of soft gluons', otherwise: 'off' }),
-  cutoff: number('GeV', { purpose: 'smallest kT of a branching', otherwise: cutoff }),
+  cutoff: number('GeV', { purpose: 'smallest kT of a branching (coherent: pT)', otherwise: cutoff }),
   flavours: integer(0, 5, { purpose: 'quark flavours that a gluon splits into', otherwise: flavours }),
   quark: oneOf(QUARKS, { purpose: 'force the quark of ee', otherwise: 'electroweak mix' }),
   masses: oneOf(['on', 'off'], { purpose: 'heavy charm and bottom', otherwise: 'off' }),

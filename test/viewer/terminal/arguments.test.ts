@@ -23,9 +23,10 @@ async function expectRefused(name: string, words: string[], code: string, said: 
 describe('refused, naming the option or argument and what it takes', () => {
   test.each<[string, string, RegExp]>([
     ['process', 'drell-yan', /takes ee \| scalar-gg \| scalar-bb; found "drell-yan"/],
-    ['shower', 'coherent', /takes dipole; found "coherent"/],
+    ['shower', 'antenna', /takes dipole \| coherent; found "antenna"/],
     ['order', 'angle', /takes kt \| virtuality; found "angle"/],
-    ['recoil', 'global', /takes local; found "global"/],
+    ['recoil', 'none', /takes local \| global; found "none"/],
+    ['coherence', 'yes', /takes on \| off; found "yes"/],
     ['coupling', 'three-loop', /takes fixed:VALUE \| one-loop \| two-loop/],
     ['coupling', 'fixed', /takes fixed:VALUE/],
     ['coupling', 'fixed:', /takes fixed:VALUE/],
@@ -68,6 +69,9 @@ describe('refused, naming the option or argument and what it takes', () => {
       ['--process', 'scalar-bb', '--masses', 'on', '--energy', '9'],
       /--energy 9: expected more than 9\.6 GeV/,
     ],
+    [['--coherence', 'off'], /--coherence off: expected on with --shower dipole/],
+    [['--recoil', 'global', '--masses', 'on'], /--(recoil|masses) /],
+    [['--shower', 'coherent', '--order', 'virtuality'], /--order virtuality: expected kt with/],
     [['--process', 'scalar-gg', '--quark', 'd'], /--quark 1: expected no quark/],
   ])('settings that make no sense: grow %j', (words, said) =>
     expectRefused('grow', [...words, ...OUT], 'setting', said),
@@ -76,7 +80,6 @@ describe('refused, naming the option or argument and what it takes', () => {
   test.each<[string[], string, RegExp]>([
     [['--evnets', '3'], 'unknown-option', /--evnets .*did you mean --events\?.*--energy/],
     [['--shard', '1/2'], 'unknown-option', /--shard .*--process --energy --events/],
-    [['--coherence', 'on'], 'unknown-option', /--coherence/],
     [['--json'], 'unknown-option', /--json/],
     [['-o', 'x'], 'unknown-option', /-o /],
     [['--no-trials'], 'unknown-option', /--no-trials/],
