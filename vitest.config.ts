@@ -1,12 +1,19 @@
 import { defineConfig } from 'vitest/config';
 
-// Fast tests: everything that needs no browser and no built bundle. The browser, terminal and long tests
-// have configurations of their own, which test/run.mjs calls after this one.
+// Fast tests: what needs no browser, no built bundle and no samples. `npm run check` runs these alone; test/run.mjs
+// goes on with the configurations for physics, command line and browser.
 export default defineConfig({
   test: {
     include: ['test/**/*.test.ts'],
-    exclude: ['test/browser/**', 'test/terminal/**', 'test/bench/**', '**/*.long.test.ts'],
+    exclude: [
+      'test/reference/**',
+      'test/laws/**',
+      'test/browser/**',
+      'test/terminal/**',
+      'test/bench/**',
+      '**/*.long.test.ts',
+    ],
     environment: 'node',
-    testTimeout: 60_000,
+    testTimeout: 120_000,
   },
 });

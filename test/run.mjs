@@ -8,6 +8,7 @@ import { alone, install, prepare, root } from '../viewer/terminal/set-up.mjs';
 const say = (line) => process.stdout.write(`${line}\n`);
 const SUITES = [
   ['fast tests', 'vitest.config.ts'],
+  ['physics', 'vitest.physics.ts'],
   ['command line', 'vitest.terminal.ts'],
   ['browser', 'vitest.browser.ts'],
 ];
