@@ -1,5 +1,7 @@
 import {
+  aliveEntries,
   ENTRY_COLUMNS,
+  entriesAtEnd,
   type History,
   KINDS,
   REASONS,
@@ -98,6 +100,21 @@ function titleOf({ head, entries, steps }: History): string {
   return `event ${head.event}${label}: ${process}, ${size}${weight}${status}`;
 }
 
+/** Final partons: where recoil is global, a row's momentum is not that of the end. */
+function finalText(history: History): string {
+  const end = entriesAtEnd(history);
+  const rows = Array.from(aliveEntries(history, history.steps.length - 1));
+  const column = (name: string, values: ArrayLike<number>, text: (value: number) => string): TextColumn => {
+    const unit = MOMENTA.includes(name) ? 'GeV' : '';
+    return { name, unit, cells: rows.map((row) => text(values[row])), align: 'number' };
+  };
+  return typeset([
+    { name: 'final', unit: '', cells: rows.map(String), align: 'number' },
+    column('id', end.id, String),
+    ...(['px', 'py', 'pz', 'e', 'm'] as const).map((name) => column(name, end[name], momentumText)),
+  ]);
+}
+
 /** One event for people: title, entries, steps (what happened, then its numbers) and trials, names and units as in JSON. */
 export function eventText(history: History): string {
   const { head, entries, steps, trials, channels } = history;
@@ -113,6 +130,7 @@ export function eventText(history: History): string {
     parts.push(tableText('step', steps, stepSpecs(true), head.columns.steps, words, unit));
     parts.push(tableText('step', steps, stepSpecs(false), head.columns.steps, words, unit));
   }
+  if (steps.boost !== null) parts.push(finalText(history));
   if (trials && trials.length > 0) {
     parts.push(tableText('trial', trials, TRIAL_COLUMNS, head.columns.trials ?? [], words, unit));
   }

@@ -8,12 +8,12 @@ import { fileTrouble, WrongUse } from './errors.ts';
 /** A file of this machine as a source of bytes, opened once: replacing it by another does not change what is read. */
 export class FileSource implements ByteSource {
   readonly name: string;
-  readonly handle: FileHandle;
+  readonly #handle: FileHandle;
   readonly #bytes: number;
 
   constructor(name: string, handle: FileHandle, bytes: number) {
     this.name = name;
-    this.handle = handle;
+    this.#handle = handle;
     this.#bytes = bytes;
   }
 
@@ -26,7 +26,7 @@ export class FileSource implements ByteSource {
     const bytes = new Uint8Array(Math.max(0, Math.min(length, this.#bytes - start)));
     let filled = 0;
     while (filled < bytes.length) {
-      const { bytesRead } = await this.handle
+      const { bytesRead } = await this.#handle
         .read(bytes, filled, bytes.length - filled, start + filled)
         .catch((error: unknown) => {
           throw fileTrouble(
@@ -43,7 +43,7 @@ export class FileSource implements ByteSource {
   }
 
   async close(): Promise<void> {
-    await this.handle.close();
+    await this.#handle.close();
   }
 }
 

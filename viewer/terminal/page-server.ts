@@ -2,9 +2,10 @@ import { createHash, randomBytes, timingSafeEqual } from 'node:crypto';
 import { createServer, type IncomingMessage, type Server, type ServerResponse } from 'node:http';
 import type { AddressInfo, Socket } from 'node:net';
 import { pipeline } from 'node:stream/promises';
+import type { ByteSource } from '../../formats/index.ts';
 import { readRange } from './byte-range.ts';
 import { Trouble, WrongUse } from './errors.ts';
-import type { FileSource } from './input.ts';
+
 import type { PageFile } from './page-files.ts';
 
 const SAMPLE = 'sample.shower';
@@ -43,7 +44,7 @@ const HEADERS: Readonly<Record<string, string>> = {
 /** What is served: the page's files, and the sample that it opens at once (null: none). */
 export interface Served {
   readonly page: ReadonlyMap<string, PageFile>;
-  readonly sample: FileSource | null;
+  readonly sample: ByteSource | null;
   /** Name of the sample as the page shows it. */
   readonly name: string;
 }
@@ -147,7 +148,7 @@ function send(
 async function sendSample(
   request: IncomingMessage,
   response: ServerResponse,
-  sample: FileSource,
+  sample: ByteSource,
 ): Promise<void> {
   const size = await sample.size();
   response.setHeader('Accept-Ranges', 'bytes');
@@ -165,7 +166,15 @@ async function sendSample(
     'Content-Length': end - start + 1,
   });
   if (request.method === 'HEAD' || size === 0) response.end();
-  else await pipeline(sample.handle.createReadStream({ start, end, autoClose: false }), response);
+  else await pipeline(pieces(sample, start, end), response);
+}
+
+const PIECE_BYTES = 1 << 18;
+
+async function* pieces(sample: ByteSource, start: number, end: number): AsyncGenerator<Uint8Array> {
+  for (let at = start; at <= end; at += PIECE_BYTES) {
+    yield await sample.read(at, Math.min(PIECE_BYTES, end + 1 - at));
+  }
 }
 
 function listen(server: Server, port: number): Promise<void> {
