@@ -1,0 +1,237 @@
+import { exp, findRoot, gaussLegendre, log } from '../math/index.ts';
+import type { EndPhaseSpace } from './end-phase-space.ts';
+import { integratedKernels, integratedKernelsBelow } from './massless-kt.ts';
+import type { Strength } from './strength.ts';
+import type { SignedDensity, ZDensity } from './z-density.ts';
+
+/** Widest panel in half rapidity: the integrands bend on the scale of one unit. */
+const PANEL = 1;
+/** Narrowest beside a singularity. */
+const NARROWEST = 0.002;
+const RULE = gaussLegendre(10);
+/** Steps in half rapidity in which a kernel's change of sign is looked for. */
+const STRIDE = 0.3;
+
+// scratch, not reentrant
+const values = new Float64Array(3);
+const panelSum = new Float64Array(3);
+
+/** Rates of a dipole end per unit of ln t, integrated over z, by quadrature of its kernels. */
+export interface EndRates {
+  /** Codes into CHANNELS: which rate stands where in `out`. g -> q qbar is one flavour's. */
+  readonly channels: readonly number[];
+  /** Rates at t and Q^2 [GeV^2]; zero outside phase space. */
+  rates(out: Float64Array, t: number, q2: number): void;
+  /** The part of them at fractions below z; w = 1 - z. */
+  ratesBelow(out: Float64Array, t: number, q2: number, z: number, w: number): void;
+}
+
+/**
+ * By Gauss-Legendre panels in half rapidity, z = 1/(1 + exp(-2b)), cut where the coupling bends.
+ *
+ * Accuracy: 1e-10 of the rate.
+ */
+export class QuadratureRates implements EndRates {
+  readonly channels: readonly number[];
+  private readonly density: ZDensity;
+  private readonly space: EndPhaseSpace;
+  private readonly strength: Strength;
+  private readonly virtuality: boolean;
+  private readonly signed: SignedDensity | null;
+  private readonly cuts: number[] = [];
+
+  /** @param signed the density again where it may be negative, which is no rate; else null. */
+  constructor(
+    virtuality: boolean,
+    density: ZDensity,
+    signed: SignedDensity | null,
+    space: EndPhaseSpace,
+    strength: Strength,
+  ) {
+    this.signed = signed;
+    this.channels = density.channels;
+    this.virtuality = virtuality;
+    this.density = density;
+    this.space = space;
+    this.strength = strength;
+  }
+
+  rates(out: Float64Array, t: number, q2: number): void {
+    this.integrate(out, t, q2, Infinity);
+  }
+
+  ratesBelow(out: Float64Array, t: number, q2: number, z: number, w: number): void {
+    this.integrate(out, t, q2, 0.5 * log(z / w));
+  }
+
+  private integrate(out: Float64Array, t: number, q2: number, upTo: number): void {
+    const { space, strength, virtuality } = this;
+    const count = this.channels.length;
+    for (let c = 0; c < count; c++) out[c] = 0;
+    const cutoff2 = strength.bends[0];
+    space.setLimit(t, q2, cutoff2);
+    const s = space.limitS;
+    const least = space.limitKT2;
+    if (!(t >= cutoff2) || s > space.highestPairMass2(q2) * (1 + 1e-12) || !space.setRange(s, least)) return;
+    const { low, high } = space;
+    const last = Math.min(high, upTo);
+    if (!(last > low)) return;
+    // how far beyond the ends the integrand is singular: the pole of the coupling, or the largest s_ij
+    let margin = PANEL;
+    if (virtuality) {
+      if (strength.pole2 > 0 && space.setRange(s, strength.pole2)) margin = space.high - high;
+    } else if (space.masses.partner > 0) {
+      if (space.setRange(space.highestPairMass2(q2), t))
+        margin = Math.min(space.high - high, low - space.low);
+    }
+    const { cuts } = this;
+    cuts.length = 0;
+    cuts.push(low, high);
+    if (virtuality)
+      for (let n = 1; n < strength.bends.length; n++)
+        if (strength.bends[n] > least && space.setRange(s, strength.bends[n]))
+          cuts.push(space.low, space.high);
+    this.density.begin(t, q2);
+    const { signed } = this;
+    if (signed !== null) for (let c = 0; c < count; c++) this.cutAtZeros(signed, c, low, high);
+    cuts.sort(ascending);
+    for (let n = 0; n + 1 < cuts.length && cuts[n] < last; n++) {
+      let from = cuts[n];
+      const to = Math.min(cuts[n + 1], last);
+      while (from < to) {
+        // no wider than the way to a singularity on either side, from the panel's nearer end
+        const reach = Math.min(PANEL, from - low + margin, 0.5 * (high + margin - from));
+        const width = Math.max(reach, NARROWEST);
+        const left = to - from;
+        const next = left <= width ? to : from + Math.min(width, left < 2 * width ? 0.5 * left : width);
+        this.panel(out, count, from, next);
+        from = next;
+      }
+    }
+  }
+
+  /** Cut where rate c changes its sign: between points a stride apart, or beside an extremum between them. */
+  private cutAtZeros(density: SignedDensity, c: number, low: number, high: number): void {
+    const at = (b: number): number => {
+      const w = 1 / (1 + exp(2 * b));
+      density.kernels(values, 1 - w, w);
+      return values[c];
+    };
+    const strides = Math.max(2, Math.ceil((high - low) / STRIDE));
+    // the very ends may lie outside by rounding
+    const inset = 1e-9 * (high - low);
+    const place = (n: number): number =>
+      n === 0 ? low + inset : n === strides ? high - inset : low + ((high - low) * n) / strides;
+    let before = NaN;
+    let here = at(place(0));
+    for (let n = 0; n < strides; n++) {
+      const after = at(place(n + 1));
+      if (here < 0 !== after < 0) this.cutBetween(at, place(n), here, place(n + 1), after);
+      else if (
+        before < 0 === here < 0 &&
+        Math.abs(here) < Math.abs(before) &&
+        Math.abs(here) <= Math.abs(after)
+      ) {
+        // nearest to zero of three: does it cross in between?
+        const peak = otherSign(at, place(n - 1), place(n), place(n + 1), here);
+        if (peak !== null) {
+          this.cutBetween(at, place(n - 1), before, peak, -here);
+          this.cutBetween(at, peak, -here, place(n + 1), after);
+        }
+      }
+      before = here;
+      here = after;
+    }
+  }
+
+  private cutBetween(at: (b: number) => number, a: number, fa: number, b: number, fb: number): void {
+    if (fa !== 0 && fb !== 0) this.cuts.push(findRoot(at, a, b, { tolerance: 1e-12 }));
+  }
+
+  /** Add one panel, in which no rate changes its sign. */
+  private panel(out: Float64Array, count: number, from: number, to: number): void {
+    const { nodes, weights } = RULE;
+    const middle = 0.5 * (from + to);
+    const half = 0.5 * (to - from);
+    for (let c = 0; c < count; c++) panelSum[c] = 0;
+    for (let k = 0; k < nodes.length; k++) {
+      const weight = 2 * half * weights[k] * evaluate(this.density, middle + half * nodes[k]);
+      for (let c = 0; c < count; c++) panelSum[c] += weight * values[c];
+    }
+    // a negative kernel is no rate
+    for (let c = 0; c < count; c++) out[c] += Math.max(0, panelSum[c]);
+  }
+}
+
+const ascending = (a: number, b: number): number => a - b;
+
+/**
+ * Where between a and c a function, nearest to zero at b of the three, has the other sign than there; null where not.
+ *
+ * Golden-section search for the extremum, ended at a width whose share in an integral is beyond the digits.
+ */
+function otherSign(f: (x: number) => number, a: number, b: number, c: number, fb: number): number | null {
+  const sign = fb < 0 ? -1 : 1;
+  let best = sign * fb;
+  while (c - a > 1e-3 * STRIDE) {
+    const right = c - b > b - a;
+    const x = right ? b + 0.381966 * (c - b) : b - 0.381966 * (b - a);
+    const value = sign * f(x);
+    if (value < 0) return x;
+    if (value < best) {
+      if (right) a = b;
+      else c = b;
+      b = x;
+      best = value;
+    } else if (right) c = x;
+    else a = x;
+  }
+  return null;
+}
+
+/** Densities at half rapidity b, into values. @returns z(1-z), which is half of dz/db. */
+function evaluate(density: ZDensity, b: number): number {
+  // the smaller of z and 1-z from the exponential
+  const e = exp(b < 0 ? 2 * b : -2 * b);
+  const large = 1 / (1 + e);
+  const small = e * large;
+  density.at(values, b < 0 ? small : large, b < 0 ? large : small);
+  return small * large;
+}
+
+/** Massless ends in kt ordering, in closed form. Accuracy: 1e-12 of the largest rate. */
+export class MasslessKtRates implements EndRates {
+  readonly channels = [0, 1, 2];
+  private readonly strength: Strength;
+
+  constructor(strength: Strength) {
+    this.strength = strength;
+  }
+
+  rates(out: Float64Array, t: number, q2: number): void {
+    integratedKernels(out, t / q2);
+    this.couple(out, t);
+  }
+
+  ratesBelow(out: Float64Array, t: number, q2: number, z: number, w: number): void {
+    const x = t / q2;
+    if (!(z * w > x)) {
+      integratedKernels(out, x);
+      if (z < w) out[0] = out[1] = out[2] = 0;
+    } else integratedKernelsBelow(out, x, z, w);
+    this.couple(out, t);
+  }
+
+  private couple(out: Float64Array, t: number): void {
+    if (!(t >= this.strength.bends[0])) {
+      out[0] = out[1] = out[2] = 0;
+      return;
+    }
+    const lnT = log(t);
+    const plain = this.strength.plain(lnT);
+    const soft = this.strength.soft(lnT, plain);
+    out[0] *= soft;
+    out[1] *= soft;
+    out[2] *= plain;
+  }
+}
