@@ -8,6 +8,8 @@ export default defineConfig({
     exclude: [
       'test/reference/**',
       'test/laws/**',
+      'test/engine/shower/coherent/**',
+      'test/engine/math/accuracy.test.ts',
       'test/browser/**',
       'test/terminal/**',
       'test/bench/**',
