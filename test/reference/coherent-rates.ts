@@ -31,7 +31,7 @@ const fraction = (y: number): number => 1 / (1 + Math.exp(-y));
 function edges(holds: (z: number) => boolean, inside: number): [number, number] {
   const edge = (outside: number): number => {
     let [a, b] = [inside, outside];
-    for (let n = 0; n < 200; n++) {
+    for (let n = 0; n < 60; n++) {
       const middle = (a + b) / 2;
       if (holds(middle)) a = middle;
       else b = middle;
@@ -94,12 +94,12 @@ export function lineExponent(line: Line, t: number): number {
   return integrate((x) => 2 * x * lineRate(line, Math.exp(lnLow + x * x)), 0, Math.sqrt(top), 0.25);
 }
 
-/** The same as a function of t, interpolated; accuracy 1e-4. */
+/** The same as a function of t, interpolated; accuracy 1e-3. */
 export function exponentTable(line: Line, highest: number): (t: number) => number {
   const lnLow = Math.log(16 * line.cutoff ** 2);
-  const width = Math.sqrt(Math.log(highest * 1.001) - lnLow) / 300;
+  const width = Math.sqrt(Math.log(highest * 1.001) - lnLow) / 120;
   const sums = [0];
-  for (let n = 0; n < 300; n++) {
+  for (let n = 0; n < 120; n++) {
     const cell = integrate(
       (x) => 2 * x * lineRate(line, Math.exp(lnLow + x * x)),
       n * width,
@@ -109,7 +109,7 @@ export function exponentTable(line: Line, highest: number): (t: number) => numbe
   }
   return (t) => {
     const x = Math.sqrt(Math.max(0, Math.log(t) - lnLow)) / width;
-    const n = Math.min(299, Math.floor(x));
+    const n = Math.min(119, Math.floor(x));
     return sums[n] + (x - n) * (sums[n + 1] - sums[n]);
   };
 }

@@ -3,8 +3,9 @@ import type { HardProcess } from '../../processes/index.ts';
 import { VERSION } from '../../version.ts';
 import { describeSettings, type GrowSettings } from '../settings.ts';
 
-/** Columns that one-to-two branchings do not have. */
+/** Columns that one-to-two branchings do not have: nobody recoils, and a trial has not chosen its colour line. */
 const ABSENT = new Set(['y', 'recoiler', 'recoilerAfter', 'noEmission']);
+const ABSENT_OF_TRIALS = new Set(['partner']);
 
 /**
  * What all events of a sample of one-to-two branchings have in common.
@@ -43,7 +44,9 @@ export function coherentHead(settings: GrowSettings, process: HardProcess): Samp
     columns: {
       entries: ENTRY_COLUMNS.map(({ name }) => name),
       steps: STEP_COLUMNS.map(({ name }) => name).filter((name) => !ABSENT.has(name)),
-      trials: settings.trials ? TRIAL_COLUMNS.map(({ name }) => name) : null,
+      trials: settings.trials
+        ? TRIAL_COLUMNS.map(({ name }) => name).filter((name) => !ABSENT_OF_TRIALS.has(name))
+        : null,
     },
   };
 }

@@ -10,7 +10,7 @@ import {
 } from '../../../../engine/index.ts';
 import { coherentBatch, SAMPLES, type Sample } from './events.ts';
 
-const EVENTS = 80;
+const EVENTS = 50;
 
 /** Every event of every sample. */
 function forEach(test: (history: History, sample: Sample) => void): void {
