@@ -4,6 +4,7 @@ import {
   createGrower,
   type History,
   HistoryBatch,
+  ROLES,
   resolveSettings,
 } from '../../engine/index.ts';
 import { exponentTable, makeLine } from './coherent-rates.ts';
