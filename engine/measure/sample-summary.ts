@@ -141,7 +141,7 @@ export class SampleSummary {
 
   /** Means over steps. A hard parton's own birth angle is pi, so in coherent branching its steps say nothing. */
   private addFractions(history: History): void {
-    const { steps, entries, head } = history;
+    const { steps, head } = history;
     const measures = measureSteps(history, this.measures);
     this.measures = measures;
     const { openingAngle, birthAngle, partnerAngle } = measures;
@@ -156,7 +156,8 @@ export class SampleSummary {
         rejected += steps.rejected[step];
         recorded++;
       }
-      const assessable = steps.kind[step] !== ONE_TO_TWO || entries.madeBy[steps.emitter[step]] >= 0;
+      // coherent: the steps whose emitter came from a step
+      const assessable = steps.kind[step] !== ONE_TO_TWO || steps.previous[step] >= 0;
       if (assessable && openingAngle[step] >= 0 && birthAngle[step] >= 0) {
         withBirth++;
         if (openingAngle[step] > birthAngle[step]) aboveBirth++;
