@@ -23,7 +23,7 @@ export function chebyshevRule(n: number): ChebyshevRule {
   for (let k = 0; k < n; k++) {
     nodes[k] = -cos(((k + 0.5) * Math.PI) / n);
     for (let j = 0; j < n; j++) {
-      const value = valueOf(powers[j], nodes[k]);
+      const value = polynomial(powers[j], nodes[k]);
       const share = ((j === 0 ? 1 : 2) * value) / n;
       toChebyshev[j * n + k] = share;
       for (let m = 0; m <= j; m++) toPowers[m * n + k] += powers[j][m] * share;
@@ -45,7 +45,7 @@ function chebyshevPowers(n: number): number[][] {
   return rows;
 }
 
-function valueOf(powers: readonly number[], x: number): number {
+function polynomial(powers: readonly number[], x: number): number {
   let sum = 0;
   for (let m = powers.length - 1; m >= 0; m--) sum = sum * x + powers[m];
   return sum;

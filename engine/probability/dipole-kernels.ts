@@ -1,15 +1,32 @@
+import type { CHANNELS } from '../history/index.ts';
 import { quarkMass } from '../qcd/index.ts';
 import { EndPhaseSpace } from './end-phase-space.ts';
 import { type EndRates, MasslessKtRates, QuadratureRates } from './end-rates.ts';
 import { ExponentTable } from './exponent-table.ts';
 import type { KernelSettings } from './kernel-settings.ts';
 import { Strength } from './strength.ts';
-import { G_GG, G_QQ, MassiveDensity, MasslessDensity, Q_QG } from './z-density.ts';
+import { G_GG, G_QQ, MassiveDensity, MasslessDensity, Q_QG, type ZDensity } from './z-density.ts';
 
 /** Channels of a dipole end that share one phase space: their rates, and the table of their exponents. */
 export interface EndFamily {
+  readonly space: EndPhaseSpace;
+  readonly density: ZDensity;
   readonly rates: EndRates;
   readonly table: ExponentTable;
+}
+
+/** Which channel of which dipole end. */
+export interface DipoleEnd {
+  readonly channel: (typeof CHANNELS)[number];
+  /** PDG numbers. */
+  readonly emitter: number;
+  readonly partner: number;
+  /** PDG number of the quark of g -> q qbar. */
+  readonly flavour?: number;
+  /** 2 p.q of the dipole [GeV^2], up to the square of the event's energy. */
+  readonly q2: number;
+  /** Whether the first emission's matrix element corrects the rates where it is asked for: the hard process's own dipoles. */
+  readonly first?: boolean;
 }
 
 /** Kinds of partons by what their mass does in a kernel. */
@@ -74,12 +91,20 @@ export class DipoleKernels {
       const space = new EndPhaseSpace(virtuality, { emitter: 0, partner: 0, i: 0, j: 0 });
       const density = new MasslessDensity(virtuality, strength, firstEmission);
       const rates = new QuadratureRates(virtuality, density, null, space, strength);
-      this.firstGap = {
-        rates,
-        table: new ExponentTable(rates, space, strength.bends, energy * energy, true),
-      };
+      const table = new ExponentTable(rates, space, strength.bends, energy * energy, true);
+      this.firstGap = { space, density, rates, table };
     }
     return this.firstGap;
+  }
+
+  /** Family of one channel of an end. */
+  familyOf({ channel, emitter, partner, flavour = 0, first = false }: DipoleEnd): EndFamily {
+    const corrected = first ? this.first() : null;
+    if (corrected !== null) return corrected;
+    const quark = channel === 'g_qq' ? this.kindOf(flavour) : LIGHT;
+    return quark === LIGHT
+      ? this.emission(this.kindOf(emitter), this.kindOf(partner))
+      : this.splitting(quark, this.kindOf(partner));
   }
 
   private get virtuality(): boolean {
@@ -91,10 +116,11 @@ export class DipoleKernels {
     if (partner > 0) return this.makeMassive(0, partner, 0, 0, [Q_QG, G_GG, G_QQ]);
     const { strength, virtuality } = this;
     const space = new EndPhaseSpace(virtuality, { emitter: 0, partner: 0, i: 0, j: 0 });
+    const density = new MasslessDensity(virtuality, strength, null);
     const rates = virtuality
-      ? new QuadratureRates(true, new MasslessDensity(true, strength, null), null, space, strength)
+      ? new QuadratureRates(true, density, null, space, strength)
       : new MasslessKtRates(strength);
-    return this.tabulate(rates, space);
+    return this.tabulate(rates, density, space);
   }
 
   private makeMassive(
@@ -112,12 +138,12 @@ export class DipoleKernels {
     // with velocity factors all of them can be negative beside a heavy partner, without only q -> q g of a heavy quark
     const turns = emitter > 0 || (velocityFactors === 'published' && partner > 0);
     const rates = new QuadratureRates(virtuality, density, turns ? density : null, space, strength);
-    return this.tabulate(rates, space);
+    return this.tabulate(rates, density, space);
   }
 
-  private tabulate(rates: EndRates, space: EndPhaseSpace): EndFamily {
+  private tabulate(rates: EndRates, density: ZDensity, space: EndPhaseSpace): EndFamily {
     const { energy } = this.settings;
     const table = new ExponentTable(rates, space, this.strength.bends, energy * energy, false);
-    return { rates, table };
+    return { space, density, rates, table };
   }
 }

@@ -29,10 +29,10 @@ export type Edge =
  */
 export class EndPhaseSpace {
   readonly masses: EndMasses;
-  /** Left by setLimit [GeV^2]. */
+  /** Left by `open` [GeV^2]: z lies where kT^2 at s_ij = limitS is at least limitKT2. */
   limitS = 0;
   limitKT2 = 0;
-  /** Left by setRange: half rapidities. */
+  /** Left by `setRange` and `open`: half rapidities. */
   low = 0;
   high = 0;
   private readonly virtuality: boolean;
@@ -90,19 +90,26 @@ export class EndPhaseSpace {
     return b >= 0 ? (2 * kT2 * rest * rest) / (b + root) : (root - b) / (2 * a);
   }
 
-  /** s_ij up to which z lies at given t, and the least kT^2 over z there; into limitS, limitKT2. */
-  setLimit(t: number, q2: number, cutoff2: number): void {
-    if (!this.virtuality) {
+  /**
+   * Find the range of z at t above a cutoff in kT^2 [GeV^2].
+   *
+   * @returns whether there is one; its ends are in `low` and `high`, what it came from in `limitS` and `limitKT2`.
+   */
+  open(t: number, q2: number, cutoff2: number): boolean {
+    if (this.virtuality) {
+      const s = t + this.mij2;
+      const away = q2 + this.mij2 - s;
+      const rim = this.mk2 === 0 ? 0 : (this.mk2 * kallen(s, this.mi2, this.mj2)) / (away * away);
+      this.limitS = s;
+      this.limitKT2 = Math.max(rim, cutoff2);
+    } else {
+      if (!(t >= cutoff2)) return false;
       this.limitS = this.rim(t, q2);
       this.limitKT2 = t;
-      return;
     }
-    const { mk2 } = this;
-    const s = t + this.mij2;
-    const away = q2 + this.mij2 - s;
-    const least = mk2 === 0 ? 0 : (mk2 * kallen(s, this.mi2, this.mj2)) / (away * away);
-    this.limitS = s;
-    this.limitKT2 = Math.max(least, cutoff2);
+    const { limitS, limitKT2 } = this;
+    // the margin because at m_k = 0 in kt ordering it is the highest itself
+    return limitS <= this.highestPairMass2(q2) * (1 + 1e-12) && this.setRange(limitS, limitKT2);
   }
 
   /**

@@ -68,11 +68,9 @@ export class QuadratureRates implements EndRates {
     const { space, strength, virtuality } = this;
     const count = this.channels.length;
     for (let c = 0; c < count; c++) out[c] = 0;
-    const cutoff2 = strength.bends[0];
-    space.setLimit(t, q2, cutoff2);
+    if (!space.open(t, q2, strength.bends[0])) return;
     const s = space.limitS;
     const least = space.limitKT2;
-    if (!(t >= cutoff2) || s > space.highestPairMass2(q2) * (1 + 1e-12) || !space.setRange(s, least)) return;
     const { low, high } = space;
     const last = Math.min(high, upTo);
     if (!(last > low)) return;
@@ -110,42 +108,39 @@ export class QuadratureRates implements EndRates {
     }
   }
 
-  /** Cut where rate c changes its sign: between points a stride apart, or beside an extremum between them. */
+  /** Cut where kernel c changes its sign, between points a stride apart or twice between two of them. */
   private cutAtZeros(density: SignedDensity, c: number, low: number, high: number): void {
     const at = (b: number): number => {
       const w = 1 / (1 + exp(2 * b));
       density.kernels(values, 1 - w, w);
       return values[c];
     };
-    const strides = Math.max(2, Math.ceil((high - low) / STRIDE));
+    const strides = Math.ceil((high - low) / STRIDE);
     // the very ends may lie outside by rounding
     const inset = 1e-9 * (high - low);
-    const place = (n: number): number =>
-      n === 0 ? low + inset : n === strides ? high - inset : low + ((high - low) * n) / strides;
-    let before = NaN;
-    let here = at(place(0));
+    const width = (high - low - 2 * inset) / strides;
+    const near = 1e-5 * width;
+    let a = low + inset;
+    let fa = at(a);
+    let slopeA = at(a + near) - fa;
     for (let n = 0; n < strides; n++) {
-      const after = at(place(n + 1));
-      if (here < 0 !== after < 0) this.cutBetween(at, place(n), here, place(n + 1), after);
-      else if (
-        before < 0 === here < 0 &&
-        Math.abs(here) < Math.abs(before) &&
-        Math.abs(here) <= Math.abs(after)
-      ) {
-        // nearest to zero of three: does it cross in between?
-        const peak = otherSign(at, place(n - 1), place(n), place(n + 1), here);
-        if (peak !== null) {
-          this.cutBetween(at, place(n - 1), before, peak, -here);
-          this.cutBetween(at, peak, -here, place(n + 1), after);
-        }
+      const b = a + width;
+      const fb = at(b);
+      const slopeB = fb - at(b - near);
+      if (fa < 0 !== fb < 0) this.cuts.push(findRoot(at, a, b, ROOT));
+      else {
+        const sign = fa < 0 ? -1 : 1;
+        // both ends lean towards zero: where their tangents meet, a convex function lies no lower
+        const falls = (-sign * slopeA) / near;
+        const rises = (sign * slopeB) / near;
+        const least = (sign * (fa * rises + fb * falls) - width * falls * rises) / (falls + rises);
+        const x = falls > 0 && rises > 0 && least < 0 ? otherSign(at, a, b, sign) : null;
+        if (x !== null) this.cuts.push(findRoot(at, a, x, ROOT), findRoot(at, x, b, ROOT));
       }
-      before = here;
-      here = after;
+      a = b;
+      fa = fb;
+      slopeA = at(b + near) - fb;
     }
-  }
-
-  private cutBetween(at: (b: number) => number, a: number, fa: number, b: number, fb: number): void {
-    if (fa !== 0 && fb !== 0) this.cuts.push(findRoot(at, a, b, { tolerance: 1e-12 }));
   }
 
   /** Add one panel, in which no rate changes its sign. */
@@ -166,28 +161,37 @@ export class QuadratureRates implements EndRates {
 const ascending = (a: number, b: number): number => a - b;
 
 /**
- * Where between a and c a function, nearest to zero at b of the three, has the other sign than there; null where not.
+ * Where between a and b a function of one extremum has the other sign than at both ends; null where not.
  *
  * Golden-section search for the extremum, ended at a width whose share in an integral is beyond the digits.
  */
-function otherSign(f: (x: number) => number, a: number, b: number, c: number, fb: number): number | null {
-  const sign = fb < 0 ? -1 : 1;
-  let best = sign * fb;
-  while (c - a > 1e-3 * STRIDE) {
-    const right = c - b > b - a;
-    const x = right ? b + 0.381966 * (c - b) : b - 0.381966 * (b - a);
-    const value = sign * f(x);
-    if (value < 0) return x;
-    if (value < best) {
-      if (right) a = b;
-      else c = b;
-      b = x;
-      best = value;
-    } else if (right) c = x;
-    else a = x;
+function otherSign(f: (x: number) => number, a: number, b: number, sign: number): number | null {
+  let left = a + GOLDEN * (b - a);
+  let right = b - GOLDEN * (b - a);
+  let fLeft = sign * f(left);
+  let fRight = sign * f(right);
+  while (b - a > 1e-3 * STRIDE) {
+    if (fLeft < 0) return left;
+    if (fRight < 0) return right;
+    if (fLeft < fRight) {
+      b = right;
+      right = left;
+      fRight = fLeft;
+      left = a + GOLDEN * (b - a);
+      fLeft = sign * f(left);
+    } else {
+      a = left;
+      left = right;
+      fLeft = fRight;
+      right = b - GOLDEN * (b - a);
+      fRight = sign * f(right);
+    }
   }
   return null;
 }
+
+const GOLDEN = 0.3819660112501051;
+const ROOT = { tolerance: 1e-12 };
 
 /** Densities at half rapidity b, into values. @returns z(1-z), which is half of dz/db. */
 function evaluate(density: ZDensity, b: number): number {

@@ -1,12 +1,16 @@
 import type { Head, History } from '../history/index.ts';
-import { LandauPoleError, quarkMass } from '../qcd/index.ts';
+import { quarkMass } from '../qcd/index.ts';
+import { Competitors } from './competitors.ts';
+import { openKernels } from './dipole-ends.ts';
 import { DipoleKernels } from './dipole-kernels.ts';
 import { type GapProbabilities, judgeGaps } from './gap-probabilities.ts';
-import { type NotAssessable, notAssessable, readKernelSettings } from './kernel-settings.ts';
+import { type NotAssessable, notAssessable } from './kernel-settings.ts';
 import { LiveDipoles } from './live-dipoles.ts';
+import { judgeConditionals, type StepConditionals } from './step-conditionals.ts';
 
 const ENTRY_COLUMNS = ['id', 'px', 'py', 'pz', 'e', 'colour', 'anticolour', 'madeBy', 'endedBy'] as const;
 const STEP_COLUMNS = ['t'] as const;
+const CONDITIONAL_COLUMNS = ['z', 'channel', 'emitter', 'partner', 'i', 'j'] as const;
 
 /**
  * Computes how likely events were, by quadrature of the kernels that their heads name.
@@ -18,6 +22,7 @@ export class GapJudge {
   private shower: Head['shower'] | null = null;
   private fingerprint = '';
   private kernels: DipoleKernels | NotAssessable = notAssessable('no event yet');
+  private readonly competitors = new Competitors();
   private readonly dipoles = new LiveDipoles((id) => this.massOf(id));
 
   /**
@@ -28,6 +33,16 @@ export class GapJudge {
   gapsOf(history: History): GapProbabilities | NotAssessable {
     const kernels = this.kernelsOf(history);
     return kernels instanceof DipoleKernels ? judgeGaps(history, kernels, this.dipoles) : kernels;
+  }
+
+  /** Distribution of z, and of end and channel, at each step's own t, or why there is none. */
+  conditionalsOf(history: History): StepConditionals | NotAssessable {
+    const kernels = this.kernelsOf(history);
+    if (!(kernels instanceof DipoleKernels)) return kernels;
+    for (const name of CONDITIONAL_COLUMNS)
+      if (!history.head.columns.steps.includes(name))
+        return notAssessable(`column ${name} of the steps is absent`);
+    return judgeConditionals(history, kernels, this.dipoles, this.competitors);
   }
 
   private massOf(id: number): number {
@@ -54,12 +69,5 @@ function makeKernels(head: Head): DipoleKernels | NotAssessable {
     if (!head.columns.entries.includes(name)) return notAssessable(`column ${name} of the entries is absent`);
   for (const name of STEP_COLUMNS)
     if (!head.columns.steps.includes(name)) return notAssessable(`column ${name} of the steps is absent`);
-  const settings = readKernelSettings(head);
-  if ('assessable' in settings) return settings;
-  try {
-    return new DipoleKernels(settings);
-  } catch (error) {
-    if (error instanceof LandauPoleError) return notAssessable(error.message);
-    throw error;
-  }
+  return openKernels(head);
 }

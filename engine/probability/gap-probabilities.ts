@@ -66,8 +66,8 @@ export function judgeGaps(history: History, kernels: DipoleKernels, dipoles: Liv
   return out;
 }
 
-/** Whether the tables hold every dipole. */
-function demandDipoles(
+/** Whether the tables hold every dipole. @param first whether the first emission's matrix element corrects the rates. */
+export function demandDipoles(
   dipoles: LiveDipoles,
   { entries }: History,
   kernels: DipoleKernels,

@@ -1,4 +1,4 @@
-import type { Head, SettingValue } from '../history/index.ts';
+import type { SampleHead, SettingValue } from '../history/index.ts';
 import {
   type CouplingChoice,
   type FirstEmissionRatio,
@@ -45,7 +45,7 @@ class Unknown extends Error {}
  *
  * @returns what is missing or unknown instead, never a default.
  */
-export function readKernelSettings(head: Head): KernelSettings | NotAssessable {
+export function readKernelSettings(head: SampleHead): KernelSettings | NotAssessable {
   try {
     const settings = readShower(head.shower);
     demandConsistent(head, settings);
@@ -56,7 +56,7 @@ export function readKernelSettings(head: Head): KernelSettings | NotAssessable {
   }
 }
 
-type Shower = Head['shower'];
+type Shower = SampleHead['shower'];
 
 function readShower(shower: Shower): KernelSettings {
   word(shower, 'shower', ['dipole']);
@@ -96,7 +96,7 @@ function readCoupling(value: SettingValue): CouplingChoice {
 }
 
 /** The head's scales and words must be those that the settings mean. */
-function demandConsistent(head: Head, settings: KernelSettings): void {
+function demandConsistent(head: SampleHead, settings: KernelSettings): void {
   const { order, energy, cutoff } = settings;
   const kt = order === 'kt';
   demand(head.evolutionVariable === order, `evolution in ${head.evolutionVariable}`, order);
