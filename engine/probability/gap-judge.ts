@@ -1,4 +1,4 @@
-import type { Head, History } from '../history/index.ts';
+import { BOOST_COLUMN, type Head, type History } from '../history/index.ts';
 import { quarkMass } from '../qcd/index.ts';
 import { Competitors } from './competitors.ts';
 import { openKernels } from './dipole-ends.ts';
@@ -69,5 +69,7 @@ function makeKernels(head: Head): DipoleKernels | NotAssessable {
     if (!head.columns.entries.includes(name)) return notAssessable(`column ${name} of the entries is absent`);
   for (const name of STEP_COLUMNS)
     if (!head.columns.steps.includes(name)) return notAssessable(`column ${name} of the steps is absent`);
+  if (head.shower.recoil === 'global' && !head.columns.steps.includes(BOOST_COLUMN))
+    return notAssessable(`column ${BOOST_COLUMN} of the steps is absent, and recoil is global`);
   return openKernels(head);
 }

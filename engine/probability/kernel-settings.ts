@@ -60,7 +60,8 @@ type Shower = SampleHead['shower'];
 
 function readShower(shower: Shower): KernelSettings {
   word(shower, 'shower', ['dipole']);
-  word(shower, 'recoil', ['local']);
+  // rates know nothing of who recoils; momenta do
+  word(shower, 'recoil', ['local', 'global']);
   const energy = positive(shower, 'energy');
   const cutoff = positive(shower, 'cutoff');
   const flavours = recorded(shower, 'flavours');

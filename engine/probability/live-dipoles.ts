@@ -1,14 +1,10 @@
-import { type EntryTable, type History, ROLES } from '../history/index.ts';
+import { BOOST_NUMBERS, type EntryTable, type History, ROLES } from '../history/index.ts';
 import { dot } from '../math/index.ts';
 
 const INCOMING = ROLES.indexOf('incoming');
 const RESONANCE = ROLES.indexOf('resonance');
 /** Numbers that whoever follows the dipoles may keep with each: see `kept`. */
 export const KEPT = 3;
-
-// scratch, not reentrant
-const p = new Float64Array(4);
-const q = new Float64Array(4);
 
 /**
  * The colour dipoles of an event, followed from step to step by the colour tags of its rows.
@@ -33,6 +29,10 @@ export class LiveDipoles {
   private tags = new Int32Array(64);
   private readonly slots = new Map<number, number>();
   private entries: EntryTable | null = null;
+  /** Transformations of the rows that a step leaves alone, null where recoil is local. */
+  private boost: Float64Array | null = null;
+  /** Row to its present momentum, px, py, pz, E [GeV]. */
+  private momenta = new Float64Array(4 * 64);
   private readonly massOf: (id: number) => number;
   /** Rows in the order of the step that made them: those of step s from startMade[s + 1]. */
   private made = new Int32Array(256);
@@ -50,6 +50,7 @@ export class LiveDipoles {
     this.rowCount = 0;
     this.slots.clear();
     this.entries = history.entries;
+    this.boost = history.steps.boost;
     this.order(history);
     this.advance(-1);
   }
@@ -66,6 +67,7 @@ export class LiveDipoles {
       else this.rows[kept++] = row;
     }
     this.rowCount = kept;
+    if (this.boost !== null && step >= 0) this.transform(this.boost, BOOST_NUMBERS * step);
     for (let n = startMade[step + 1]; n < startMade[step + 2]; n++) this.beginRow(entries, made[n]);
     for (let slot = this.count - 1; slot >= 0; slot--)
       if (this.colourRow[slot] < 0 && this.anticolourRow[slot] < 0) this.remove(slot);
@@ -86,7 +88,10 @@ export class LiveDipoles {
     const bins = steps.length + 2;
     if (this.startMade.length < bins + 1) this.startMade = new Int32Array(2 * bins);
     if (this.made.length < entries.length) this.made = new Int32Array(2 * entries.length);
-    if (this.rows.length < entries.length) this.rows = new Int32Array(2 * entries.length);
+    if (this.rows.length < entries.length) {
+      this.rows = new Int32Array(2 * entries.length);
+      this.momenta = new Float64Array(8 * entries.length);
+    }
     const { made, startMade } = this;
     startMade.fill(0, 0, bins + 1);
     const binOf = (row: number): number => {
@@ -108,6 +113,10 @@ export class LiveDipoles {
     // rows of a later step mostly stand last
     for (; at > 0 && this.rows[at - 1] > row; at--) this.rows[at] = this.rows[at - 1];
     this.rows[at] = row;
+    this.momenta[4 * row] = entries.px[row];
+    this.momenta[4 * row + 1] = entries.py[row];
+    this.momenta[4 * row + 2] = entries.pz[row];
+    this.momenta[4 * row + 3] = entries.e[row];
     const { colour, anticolour } = entries;
     if (colour[row] !== 0) this.colourRow[this.slotOf(colour[row])] = row;
     if (anticolour[row] !== 0) this.anticolourRow[this.slotOf(anticolour[row])] = row;
@@ -160,9 +169,25 @@ export class LiveDipoles {
       this.q2[slot] = NaN;
       return;
     }
-    take(p, entries, a);
-    take(q, entries, b);
-    this.q2[slot] = 2 * dot(p, q, this.massOf(entries.id[a]), this.massOf(entries.id[b]));
+    const { massOf, momenta } = this;
+    this.q2[slot] = 2 * dot(momenta, momenta, massOf(entries.id[a]), massOf(entries.id[b]), 4 * a, 4 * b);
+  }
+
+  /** Move the momenta of all living rows; NaN stands for no transformation. */
+  private transform(boost: Float64Array, at: number): void {
+    if (Number.isNaN(boost[at])) return;
+    const { momenta } = this;
+    for (let n = 0; n < this.rowCount; n++) {
+      const place = 4 * this.rows[n];
+      const x = momenta[place];
+      const y = momenta[place + 1];
+      const z = momenta[place + 2];
+      const e = momenta[place + 3];
+      for (let c = 0; c < 4; c++) {
+        const row = at + 4 * c;
+        momenta[place + c] = boost[row] * x + boost[row + 1] * y + boost[row + 2] * z + boost[row + 3] * e;
+      }
+    }
   }
 
   private widen(): void {
@@ -173,13 +198,6 @@ export class LiveDipoles {
     this.kept = doubled(this.kept);
     this.tags = doubled(this.tags);
   }
-}
-
-function take(out: Float64Array, entries: EntryTable, row: number): void {
-  out[0] = entries.px[row];
-  out[1] = entries.py[row];
-  out[2] = entries.pz[row];
-  out[3] = entries.e[row];
 }
 
 function doubled<T extends Float64Array | Int32Array | Uint8Array>(column: T): T {
