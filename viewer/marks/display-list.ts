@@ -85,7 +85,7 @@ export interface ArcText {
   readonly halo?: Halo;
 }
 
-/** Marks that belong together and have a name, drawn in order. */
+/** Marks that belong together, drawn in order; the name may be empty. */
 export interface Group {
   readonly kind: 'group';
   readonly name: string;

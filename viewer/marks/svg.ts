@@ -4,6 +4,7 @@ import {
   type Dots,
   type Drawing,
   type Fill,
+  type Group,
   type Halo,
   LIMB,
   type Mark,
@@ -40,8 +41,15 @@ ${paper}${svgMarks(drawing.marks, options)}
 /** Marks as SVG elements, one a line, to stand inside an svg element. */
 export function svgMarks(marks: readonly Mark[], options: SvgOptions = {}): string {
   const state = { prefix: options.prefix ?? 'arc', count: 0 };
-  return marks.map((mark) => svgMark(mark, state)).join('\n');
+  return lines(marks, state);
 }
+
+// An empty group leaves no line.
+const lines = (marks: readonly Mark[], state: State): string =>
+  marks
+    .map((mark) => svgMark(mark, state))
+    .filter((line) => line !== '')
+    .join('\n');
 
 interface State {
   readonly prefix: string;
@@ -63,8 +71,14 @@ function svgMark(mark: Mark, state: State): string {
     case 'arcText':
       return arcText(mark, state);
     case 'group':
-      return `<g id="${state.prefix}-${escapeText(mark.name)}">\n${mark.marks.map((m) => svgMark(m, state)).join('\n')}\n</g>`;
+      return group(mark, state);
   }
+}
+
+function group(mark: Group, state: State): string {
+  const inner = lines(mark.marks, state);
+  const name = mark.name === '' ? '' : ` id="${state.prefix}-${escapeText(mark.name)}"`;
+  return inner === '' ? '' : `<g${name}>\n${inner}\n</g>`;
 }
 
 function pointsPath(points: readonly number[], closed: boolean): string {

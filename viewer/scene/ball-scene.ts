@@ -46,9 +46,10 @@ import {
   GLYPH_FRAGMENT,
   GLYPH_VERTEX,
   GROUND_FRAGMENT,
-  LINE_FRAGMENT,
+  INK_FRAGMENT,
   LINE_VERTEX,
   SCREEN_VERTEX,
+  STRAND_FRAGMENT,
   WASH_FRAGMENT,
 } from './shaders/index.ts';
 
@@ -112,11 +113,10 @@ export class BallScene {
     this.#renderer = new WebGLRenderer({ canvas, context: context as WebGL2RenderingContext });
     this.#renderer.autoClear = true;
     this.#renderer.info.autoReset = true;
-    const lines = this.#material(LINE_VERTEX, LINE_FRAGMENT, true);
-    const flat = this.#material(LINE_VERTEX, LINE_FRAGMENT, false);
+    const flat = this.#material(LINE_VERTEX, INK_FRAGMENT, false);
     // Circles about the middle lie in the plane of the paper from wherever one looks.
-    const outline = this.#material(LINE_VERTEX, LINE_FRAGMENT, true);
-    const circles = this.#material(LINE_VERTEX, LINE_FRAGMENT, false);
+    const outline = this.#material(LINE_VERTEX, INK_FRAGMENT, true);
+    const circles = this.#material(LINE_VERTEX, INK_FRAGMENT, false);
     for (const material of [outline, circles]) {
       material.uniforms = { ...material.uniforms, uView: { value: new Matrix3() } };
     }
@@ -124,8 +124,8 @@ export class BallScene {
     this.#shells = meshOf(NO_LINES, circles, 1);
     this.#wash = meshOf(SCREEN, this.#material(SCREEN_VERTEX, WASH_FRAGMENT, false), 2);
     this.#wash.visible = false;
-    this.#strands = meshOf(NO_LINES, lines, 3);
-    this.#coneLines = meshOf(NO_LINES, lines, 5);
+    this.#strands = meshOf(NO_LINES, this.#material(LINE_VERTEX, STRAND_FRAGMENT, true), 3);
+    this.#coneLines = meshOf(NO_LINES, this.#material(LINE_VERTEX, INK_FRAGMENT, true), 5);
     this.#chains = meshOf(NO_LINES, this.#material(CHAIN_VERTEX, CHAIN_FRAGMENT, true), 6);
     this.#glyphs = meshOf(NO_LINES, glyphs, 7);
     this.#coneGlyphs = meshOf(NO_LINES, glyphs, 8);

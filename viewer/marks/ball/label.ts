@@ -19,19 +19,21 @@ export interface Label {
   readonly unseen?: boolean;
 }
 
-/** The labels that have a place, as marks. */
+/** Labels as marks, one a label, so that a label is the same number of the list in every picture: empty without a place. */
 export function drawLabels(
   plate: Plate,
   labels: readonly Label[],
   places: ReadonlyMap<string, number>,
 ): Mark[] {
-  return labels.flatMap((label) => {
+  return labels.map((label) => {
     const at = places.get(label.wish.key);
-    return at === undefined || label.unseen ? [] : drawLabel(plate, label, at);
+    return at === undefined || label.unseen ? NOTHING : drawLabel(plate, label, at);
   });
 }
 
-function drawLabel(plate: Plate, label: Label, at: number): Mark[] {
+const NOTHING: Mark = { kind: 'group', name: '', marks: [] };
+
+function drawLabel(plate: Plate, label: Label, at: number): Mark {
   const box = boxAt(label.wish, at);
   const halo: Halo = { tint: label.paper, width: 2.2 };
   const text: Text = {
@@ -44,12 +46,13 @@ function drawLabel(plate: Plate, label: Label, at: number): Mark[] {
     anchor: 'start',
     halo,
   };
-  if (label.leader !== 'always' && !(label.leader === 'far' && isFar(at))) return [text];
+  if (label.leader !== 'always' && !(label.leader === 'far' && isFar(at))) return text;
   const { x, y } = label.wish;
   const toX = Math.max(box.x, Math.min(box.x + box.width, x));
   const toY = Math.max(box.y, Math.min(box.y + box.height, y));
   const stroke = { tint: plate.palette.ink, width: 1.1 * plate.stage.size };
-  return [{ kind: 'polyline', points: [x, y, toX, toY], stroke }, text];
+  const line: Mark = { kind: 'polyline', points: [x, y, toX, toY], stroke };
+  return { kind: 'group', name: '', marks: [line, text] };
 }
 
 /** Boxes along a text on a curve, one every 12 px. */

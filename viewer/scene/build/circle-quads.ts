@@ -23,6 +23,6 @@ export const outlineQuads = (): LineQuads => lineQuads([line(circle(1, 288), 1.7
 /** The rim, and dotted shells at the radii given, in the plane of the paper. */
 export const shellQuads = (radii: readonly number[]): LineQuads =>
   lineQuads([
-    ...radii.map((radius) => line(circle(radius, 144), 0.95, LINE_STYLES.dotted)),
+    ...radii.map((radius) => line(circle(radius, 96), 0.95, LINE_STYLES.dotted)),
     line(circle(1, 288), 0.9, LINE_STYLES.rim),
   ]);

@@ -16,6 +16,7 @@ in vec3 aAfter;
 in vec2 aLine;
 in float aRadius;
 in float aAlong;
+uniform vec3 uTints[4];
 out float vAcross;
 out float vHalf;
 out float vRadius;
@@ -23,6 +24,7 @@ out float vAlong;
 out float vDepth;
 out float vPaper;
 flat out int vStyle;
+flat out vec3 vTint;
 
 float edgeOf(int style) {
   if (style <= OTHER) return EDGE * uSize;
@@ -54,7 +56,7 @@ void main() {
   if (dot(own, own) < 0.5) own = vec2(1.0, 0.0);
   vec2 normal = vec2(-own.y, own.x);
   float half_ = 0.5 * max(aLine.x * uSize * (style <= OTHER ? depthWidth(seen.z) : 1.0), style == GLUON ? ${float(GLUON_LEAST)} : 0.0);
-  float reach = half_ + edgeOf(style) + 1.0;
+  float reach = half_ + edgeOf(style) + 0.7;
   vec2 sum = into + away;
   vec2 offset = normal;
   // A mitre up to twice the width; sharper corners are covered by letting both segments run on a little.
@@ -71,18 +73,15 @@ void main() {
   vDepth = seen.z;
   vPaper = paperCode(here);
   vStyle = style;
+  vTint = uTints[min(style, OTHER)];
   gl_Position = inClip(here + offset * side * reach, seen.z);
 }
 `;
 
-const [dash, gap] = ANTIQUARK_DASH;
 const [partnerDash, partnerGap] = RING_DASH.partner;
 const [birthDash, birthGap, birthDot, birthGap2] = RING_DASH.birth;
 
-export const LINE_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}
-${STYLES}
-uniform vec3 uRule;
-uniform vec3 uHairline;
+const LINE_INPUT = /* glsl */ `${STYLES}
 in float vAcross;
 in float vHalf;
 in float vRadius;
@@ -90,61 +89,72 @@ in float vAlong;
 in float vDepth;
 in float vPaper;
 flat in int vStyle;
-
-float edgeOf(int style) {
-  if (style <= OTHER) return EDGE * uSize;
-  return style == TURN ? 1.2 * EDGE * uSize : 0.0;
-}
+flat in vec3 vTint;
 // Part of a dash from "begin" on, in a pattern of period "period".
 float dashed(float begin, float dash, float period) {
   float at = mod(vAlong - begin, period);
   return inside(abs(at - 0.5 * dash) - 0.5 * dash);
 }
+`;
 
+/**
+ * Parton lines: solid, cut by gaps or with an open core, on their edge of paper, faint beyond the current shell.
+ *
+ * Apart from the ink lines' shader, since a software renderer works through every branch: together they took twice the time.
+ */
+export const STRAND_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}${LINE_INPUT}
 void main() {
-  bool happened = vStyle > OTHER || vRadius <= uShell + SAME;
-  vec3 paper = paperOf(vPaper);
   float across = abs(vAcross);
-  float half_ = vHalf;
-  if (!happened) half_ = max(half_ * FUTURE_WIDTH, vStyle == GLUON ? ${float(GLUON_LEAST / 2)} : 0.45);
-  float border = inside(across - half_);
-  float drawn = border;
-  float fade = happened ? depthFade(vDepth) : FUTURE_FADE;
-  vec3 tint = uInk;
-  if (vStyle <= OTHER) tint = uTints[vStyle];
-  if (vStyle == ANTIQUARK) {
-    drawn *= dashed(0.0, ${float(dash)} * uSize, ${float(dash + gap)} * uSize);
-  } else if (vStyle == GLUON) {
-    drawn *= 1.0 - inside(across - max(half_ - max(0.95, 0.5 * half_), 0.45));
-  } else if (vStyle >= OPENING) {
-    fade = vDepth < 0.0 && vStyle <= BIRTH ? ${float(RING.behindFade)} : 0.0;
-    if (vStyle == PARTNER) drawn *= dashed(0.0, ${float(partnerDash)} * uSize, ${float(partnerDash + partnerGap)} * uSize);
-    if (vStyle == BIRTH) {
-      float period = ${float(birthDash + birthGap + birthDot + birthGap2)} * uSize;
-      float dot_ = dashed(${float(birthDash + birthGap)} * uSize, ${float(birthDot)} * uSize, period);
-      drawn *= max(dashed(0.0, ${float(birthDash)} * uSize, period), dot_);
-    }
-    if (vStyle == SILHOUETTE) {
-      fade = 0.45;
-      drawn *= dashed(0.0, 6.0 * uSize, 10.0 * uSize);
-    }
-    if (vStyle >= RIM) tint = uHairline;
-    if (vStyle == DOTTED) {
-      float at = mod(vAlong, 4.2 * uSize) - 2.1 * uSize;
-      drawn = 0.55 * inside(length(vec2(at, vAcross)) - 0.48 * uSize);
-    }
-    if (vStyle == NET) {
-      if (vDepth < 0.0) discard;
-      tint = uRule;
-      fade = 0.2;
-    }
-  }
-  float edge = edgeOf(vStyle);
-  float shown = edge > 0.0 ? inside(across - half_ - edge) : drawn;
+  bool happened = vRadius <= uShell + SAME;
+  float least = vStyle == GLUON ? ${float(GLUON_LEAST / 2)} : 0.45;
+  float half_ = happened ? vHalf : max(vHalf * FUTURE_WIDTH, least);
+  float off = across - half_;
+  float shown = inside(off - EDGE * uSize);
   if (shown < 0.004) discard;
-  colour = vec4(edge > 0.0 ? mix(paper, mix(tint, paper, fade), drawn) : mix(tint, paper, fade), shown);
+  float drawn = inside(off);
   // The edge of paper lies a little deeper than its line, so that it cuts what is behind and not its own continuation.
-  float order = happened ? happenedOrder(vDepth) : futureOrder(vDepth);
-  gl_FragDepth = order + (border < 0.5 ? (happened ? 0.01 : 0.002) : 0.0);
+  gl_FragDepth = happened
+    ? happenedOrder(vDepth) + (drawn < 0.5 ? 0.01 : 0.0)
+    : futureOrder(vDepth) + (drawn < 0.5 ? 0.002 : 0.0);
+  if (vStyle == GLUON) drawn *= 1.0 - inside(across - max(half_ - max(0.95, 0.5 * half_), 0.45));
+  if (vStyle == ANTIQUARK) drawn *= dashed(0.0, ${float(ANTIQUARK_DASH[0])} * uSize, ${float(ANTIQUARK_DASH[0] + ANTIQUARK_DASH[1])} * uSize);
+  float fade = happened ? depthFade(vDepth) : FUTURE_FADE;
+  colour = vec4(mix(paperOf(vPaper), vTint, drawn * (1.0 - fade)), shown);
+}
+`;
+
+/** Lines of the atlas: rings, silhouettes, the emitter's turn, net, outline, rim, dotted shells; none of them waits for the clock. */
+export const INK_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}${LINE_INPUT}
+uniform vec3 uRule;
+uniform vec3 uHairline;
+void main() {
+  float across = abs(vAcross);
+  float drawn = inside(across - vHalf);
+  float fade = vDepth < 0.0 && vStyle <= BIRTH ? ${float(RING.behindFade)} : 0.0;
+  vec3 tint = vStyle >= RIM ? uHairline : uInk;
+  if (vStyle == PARTNER) drawn *= dashed(0.0, ${float(partnerDash)} * uSize, ${float(partnerDash + partnerGap)} * uSize);
+  if (vStyle == BIRTH) {
+    float period = ${float(birthDash + birthGap + birthDot + birthGap2)} * uSize;
+    float dot_ = dashed(${float(birthDash + birthGap)} * uSize, ${float(birthDot)} * uSize, period);
+    drawn *= max(dashed(0.0, ${float(birthDash)} * uSize, period), dot_);
+  }
+  if (vStyle == SILHOUETTE) {
+    fade = 0.45;
+    drawn *= dashed(0.0, 6.0 * uSize, 10.0 * uSize);
+  }
+  if (vStyle == DOTTED) {
+    float at = mod(vAlong, 4.2 * uSize) - 2.1 * uSize;
+    drawn = 0.55 * inside(length(vec2(at, vAcross)) - 0.48 * uSize);
+  }
+  if (vStyle == NET) {
+    if (vDepth < 0.0) discard;
+    tint = uRule;
+    fade = 0.2;
+  }
+  bool edged = vStyle == TURN;
+  float shown = edged ? inside(across - vHalf - 1.2 * EDGE * uSize) : drawn;
+  if (shown < 0.004) discard;
+  colour = vec4(mix(paperOf(vPaper), tint, (edged ? drawn : 1.0) * (1.0 - fade)), shown);
+  gl_FragDepth = happenedOrder(vDepth) + (edged && drawn < 0.5 ? 0.01 : 0.0);
 }
 `;

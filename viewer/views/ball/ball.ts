@@ -30,7 +30,7 @@ import { pngOf, svgOf } from './save.ts';
 /** How near to a branching the pointer must be to mean it [px]. */
 const REACH = 10;
 
-/** How long after the last change of view the ball counts as turned [ms]. */
+/** How long after the last picture of a moving view the ball counts as at rest [ms]. */
 const SETTLE_MS = 160;
 
 const START: Camera = { azimuth: 0, elevation: 0.3, zoom: 1, panX: 0, panY: 0 };
@@ -70,7 +70,9 @@ export class BallElement extends LitElement implements GestureTarget {
   #time = 0;
   #running = false;
   #fineness = 1;
+  #moving = false;
   #settle = 0;
+  #drawn = 0;
   #frame = 0;
   #viewChanged = true;
   #leave: (() => void)[] = [];
@@ -137,7 +139,7 @@ export class BallElement extends LitElement implements GestureTarget {
     cancelAnimationFrame(this.#frame);
     this.#frame = 0;
     clearTimeout(this.#settle);
-    this.#settle = 0;
+    this.#moving = false;
     this.#turn = null;
     for (const end of this.#leave) end();
     this.#leave = [];
@@ -255,7 +257,7 @@ export class BallElement extends LitElement implements GestureTarget {
           cone: this.#cone,
           hover: this.#hover.value ?? -1,
           keys: this.#keys(),
-          moving: this.#settle !== 0 || this.#turn !== null,
+          moving: this.#moving,
         },
         this.#time,
       );
@@ -263,11 +265,18 @@ export class BallElement extends LitElement implements GestureTarget {
     } else picture.drawTime(this.#time, this.#running);
     this.#viewChanged = false;
     if (this.#turn) this.#redraw();
+    // Counted from the picture, not from the hand, and in pictures where those are slow: else the full lettering would be set
+    // between any two of them.
+    clearTimeout(this.#settle);
+    const wait = Math.max(SETTLE_MS, Math.min(1000, 2 * (nowMs - this.#drawn)));
+    this.#drawn = nowMs;
+    if (this.#moving) this.#settle = window.setTimeout(this.#settled, wait);
   };
 
   #followTurn(nowMs: number): void {
     const turn = this.#turn!;
     this.#camera = cameraAt(turn, nowMs);
+    this.#moving = true;
     this.#viewChanged = true;
     if (this.#camera === turn.to) this.aim(turn.to);
   }
@@ -311,8 +320,8 @@ export class BallElement extends LitElement implements GestureTarget {
     const keys = this.#keys();
     if (keys.left !== left || keys.right !== right) this.requestUpdate();
     this.#refine();
-    clearTimeout(this.#settle);
-    this.#settle = window.setTimeout(this.#settled, SETTLE_MS);
+    if (!this.#moving) this.#drawn = performance.now();
+    this.#moving = true;
     this.#redraw();
   }
 
@@ -326,7 +335,7 @@ export class BallElement extends LitElement implements GestureTarget {
   }
 
   readonly #settled = (): void => {
-    this.#settle = 0;
+    this.#moving = false;
     this.#redraw();
   };
 
