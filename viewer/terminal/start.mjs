@@ -28,7 +28,7 @@ async function demoSample() {
   const aside = join(folder, `aside-${process.pid}`);
   mkdirSync(aside);
   const bin = join(root, 'viewer', 'terminal', 'branchlight.mjs');
-  await runLoudly(process.execPath, [bin, 'grow', ...DEMO, '--out', join(aside, 'demo.shower')]);
+  await runLoudly(process.execPath, [bin, 'grow', ...DEMO, '--quiet', '--out', join(aside, 'demo.shower')]);
   renameSync(aside, join(folder, name));
   return file;
 }
