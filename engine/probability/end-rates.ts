@@ -74,13 +74,16 @@ export class QuadratureRates implements EndRates {
     const { low, high } = space;
     const last = Math.min(high, upTo);
     if (!(last > low)) return;
-    // how far beyond the ends the integrand is singular: the pole of the coupling, or the largest s_ij
-    let margin = PANEL;
-    if (virtuality) {
-      if (strength.pole2 > 0 && space.setRange(s, strength.pole2)) margin = space.high - high;
-    } else if (space.masses.partner > 0) {
-      if (space.setRange(space.highestPairMass2(q2), t))
-        margin = Math.min(space.high - high, low - space.low);
+    // how far beyond either end the integrand is singular: at the pole of the coupling, or at the largest s_ij
+    let lowMargin = PANEL;
+    let highMargin = PANEL;
+    const closes = !virtuality && space.masses.partner > 0;
+    const singular = virtuality
+      ? strength.pole2 > 0 && space.setRange(s, strength.pole2)
+      : closes && space.setRange(space.highestPairMass2(q2), t);
+    if (singular) {
+      lowMargin = low - space.low;
+      highMargin = space.high - high;
     }
     const { cuts } = this;
     cuts.length = 0;
@@ -98,7 +101,7 @@ export class QuadratureRates implements EndRates {
       const to = Math.min(cuts[n + 1], last);
       while (from < to) {
         // no wider than the way to a singularity on either side, from the panel's nearer end
-        const reach = Math.min(PANEL, from - low + margin, 0.5 * (high + margin - from));
+        const reach = Math.min(PANEL, from - low + lowMargin, 0.5 * (high + highMargin - from));
         const width = Math.max(reach, NARROWEST);
         const left = to - from;
         const next = left <= width ? to : from + Math.min(width, left < 2 * width ? 0.5 * left : width);
