@@ -294,7 +294,8 @@ describe('the ball in a browser', () => {
     expect(saved.error).toBe(null);
     expect(saved.texts).toContain('after step 4');
     expect(saved.texts.some((text) => /^θ = [\d.]+ rad$/.test(text ?? ''))).toBe(true);
-    expect(saved.size).toEqual(saved.box.map((length) => 2 * length));
+    // The box at two dots a pixel, and a margin of 16 px all round.
+    expect(saved.size).toEqual(saved.box.map((length) => 2 * (length + 32)));
     expect(saved.dark).toBeGreaterThan(0.003);
     expect(saved.corner).toBeGreaterThan(300);
     await page.close();

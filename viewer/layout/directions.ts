@@ -1,7 +1,9 @@
+import { PI } from '../../engine/index.ts';
 import { atan2, cos, sin } from '../../engine/math/index.ts';
 
 /** Three numbers in a row of an array: x, y, z at an offset. */
 export type Numbers = ArrayLike<number>;
+/** The same, to be written to. */
 export type MutableNumbers = Float64Array | Float32Array | number[];
 
 /**
@@ -72,9 +74,10 @@ export function greatCircle(
   const y = b[j + 1] - along * a[i + 1];
   const z = b[j + 2] - along * a[i + 2];
   const length = Math.sqrt(x * x + y * y + z * z);
-  if (length < 1e-12) {
+  // Towards the opposite point every way is as short; single precision could not tell them apart anyway.
+  if (length < (along > 0 ? 1e-12 : 1e-5)) {
     anyNormal(out, at, a, i);
-    return along > 0 ? 0 : atan2(0, -1);
+    return along > 0 ? 0 : PI;
   }
   out[at] = x / length;
   out[at + 1] = y / length;

@@ -34,6 +34,7 @@ export interface Strands {
   readonly stepDirection: Float64Array;
 }
 
+/** Changes of direction of the strands, end to end; one number a turn but for the vectors. */
 export interface Turns {
   /** Direction before the turn, three numbers a turn. */
   readonly direction: Float64Array;

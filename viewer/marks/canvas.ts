@@ -23,11 +23,12 @@ export const drawingFonts = (): string[] =>
  */
 export function paintDrawing(canvas: Canvas2d, drawing: Drawing, scale: number): void {
   canvas.save();
-  canvas.setTransform(scale, 0, 0, scale, 0, 0);
+  const margin = drawing.margin ?? 0;
+  canvas.setTransform(scale, 0, 0, scale, scale * margin, scale * margin);
   canvas.lineJoin = 'round';
   if (drawing.ground) {
     canvas.fillStyle = drawing.ground;
-    canvas.fillRect(0, 0, drawing.width, drawing.height);
+    canvas.fillRect(-margin, -margin, drawing.width + 2 * margin, drawing.height + 2 * margin);
   }
   for (const mark of drawing.marks) paintMark(canvas, mark);
   canvas.restore();

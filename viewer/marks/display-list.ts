@@ -12,6 +12,7 @@ export interface Stroke {
   readonly opacity?: number;
 }
 
+/** How an area is filled; opacity 0 to 1, 1 where absent. */
 export interface Fill {
   readonly tint: string;
   readonly opacity?: number;
@@ -33,6 +34,7 @@ export interface Region {
   readonly fill: Fill;
 }
 
+/** A circle about (x, y), filled, outlined or both. */
 export interface Circle {
   readonly kind: 'circle';
   readonly x: number;
@@ -55,6 +57,7 @@ export interface Dots {
   readonly fill: Fill;
 }
 
+/** Paper round letters, `width` on every side, so that lines do not run into them. */
 export interface Halo {
   readonly tint: string;
   readonly width: number;
@@ -95,10 +98,12 @@ export interface Group {
 /** A mark as plain data; later marks cover earlier ones. */
 export type Mark = Polyline | Region | Circle | Dots | Text | ArcText | Group;
 
-/** A drawing: paper of a size, and marks on it. x rightward, y downward from the upper left corner. */
+/** A drawing: paper of a size, and marks on it. x rightward, y downward from the upper left corner inside the margin. */
 export interface Drawing {
   readonly width: number;
   readonly height: number;
+  /** Paper round all of it, in addition to width and height; 0 where absent. */
+  readonly margin?: number;
   /** Tint of the paper, null for none. */
   readonly ground: string | null;
   readonly title: string;

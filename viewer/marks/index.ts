@@ -32,7 +32,7 @@ export {
   stepName,
   TIP_LENGTH,
   turnPath,
-  washShares,
+  washShare,
 } from './ball/index.ts';
 export { type Canvas2d, drawingFonts, paintDrawing } from './canvas.ts';
 export type {
@@ -54,9 +54,11 @@ export { FACES, type Face, type FaceSpec, plain, type Run, runs, SCRIPT, textOf 
 export { litEdgeOf, luminous, type Palette, palette } from './palette.ts';
 export {
   ANTIQUARK_DASH,
+  ARROWHEAD,
   arrowhead,
   depthFade,
   depthWidth,
+  END_SHARE,
   FUTURE,
   GLUON_LEAST,
   gluonRail,

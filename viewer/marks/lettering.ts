@@ -8,6 +8,7 @@ export interface Run {
   readonly place?: 'sub' | 'sup';
 }
 
+/** A face as CSS, SVG and canvas name it. */
 export interface FaceSpec {
   readonly family: string;
   readonly weight: 400 | 600;

@@ -1,6 +1,6 @@
 import { channels, mix } from './tint.ts';
 
-/** Tints of a theme as #RRGGBB; see DEVELOPERS.md for what each may be used for. */
+/** Tints of a theme as #RRGGBB. Ink is now and structure; three hues are for partons, one for findings, the wash for the selection. */
 export interface Palette {
   readonly ground: string;
   /** Paper on which what has happened is drawn: the disc inside the current shell, the Lund plane. */

@@ -55,8 +55,14 @@ export const TICK = { least: 0.008, length: 24 } as const;
 export const tickReach = (fractionLost: number, size: number): number =>
   fractionLost >= TICK.least ? TICK.length * size * Math.sqrt(Math.min(1, fractionLost)) : 0;
 
+/** Arrowheads: length and half-breadth [px at size 1], and what they grow by per pixel of the line's width. */
+export const ARROWHEAD = { length: 5.5, half: 2.7, lengthPerWidth: 1.55, halfPerWidth: 0.72 } as const;
+
 /** Length and half-breadth of an arrowhead on a line of this width [px]. */
 export const arrowhead = (width: number, size: number): { length: number; half: number } => ({
-  length: 5.5 * size + 1.55 * width,
-  half: 2.7 * size + 0.72 * width,
+  length: ARROWHEAD.length * size + ARROWHEAD.lengthPerWidth * width,
+  half: ARROWHEAD.half * size + ARROWHEAD.halfPerWidth * width,
 });
+
+/** The end of a line carries a smaller head: as on a line of this share of its width. */
+export const END_SHARE = 0.7;

@@ -28,9 +28,13 @@ export interface SvgOptions {
  * Numbers are rounded to a hundredth of a unit. The same drawing gives the same bytes.
  */
 export function svgDocument(drawing: Drawing, options: SvgOptions = {}): string {
-  const { width, height, ground, title, description } = drawing;
-  const paper = ground ? `<rect width="${n(width)}" height="${n(height)}" fill="${ground}"/>\n` : '';
-  return `<svg xmlns="http://www.w3.org/2000/svg" width="${n(width)}" height="${n(height)}" viewBox="0 0 ${n(width)} ${n(height)}" role="img">
+  const { ground, title, description, margin = 0 } = drawing;
+  const width = drawing.width + 2 * margin;
+  const height = drawing.height + 2 * margin;
+  const box = `${n(-margin)} ${n(-margin)} ${n(width)} ${n(height)}`;
+  const corner = margin === 0 ? '' : ` x="${n(-margin)}" y="${n(-margin)}"`;
+  const paper = ground ? `<rect${corner} width="${n(width)}" height="${n(height)}" fill="${ground}"/>\n` : '';
+  return `<svg xmlns="http://www.w3.org/2000/svg" width="${n(width)}" height="${n(height)}" viewBox="${box}" role="img">
 <title>${escapeText(title)}</title>
 <desc>${escapeText(description)}</desc>
 ${paper}${svgMarks(drawing.marks, options)}

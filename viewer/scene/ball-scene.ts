@@ -9,7 +9,6 @@ import {
   Scene,
   WebGLRenderer,
 } from 'three';
-import { PI } from '../../engine/index.ts';
 import { cos } from '../../engine/math/index.ts';
 import {
   type BallEvent,
@@ -21,7 +20,7 @@ import {
   type Stage,
   shells,
 } from '../layout/index.ts';
-import { type Palette, palette as palettes, SHELL_GAP, washShares } from '../marks/index.ts';
+import { type Palette, palette as palettes, SHELL_GAP, washShare } from '../marks/index.ts';
 import { ballUniforms, writePalette } from './ball-uniforms.ts';
 import {
   chainQuads,
@@ -271,10 +270,10 @@ export class BallScene {
       this.#coneGlyphs,
       glyphQuads(coneGlyphs(this.#event, this.#cone, projection.scale, this.#stage.size)),
     );
-    const shares = washShares(this.#palette);
     uniforms.uCapRadius.value = this.#cone.radius;
     for (const ring of this.#cone.rings) {
-      if (ring.kind === 'birth' || ring.angle >= PI / 2) continue;
+      const share = washShare(this.#palette, ring);
+      if (share === 0) continue;
       this.#wash.visible = true;
       const [x, y, z] = ring.axis;
       const r = projection.rotation;
@@ -285,8 +284,8 @@ export class BallScene {
         r[6] * x + r[7] * y + r[8] * z,
         cos(ring.angle),
       );
-      if (at === 0) uniforms.uCapShare.value.x = shares.opening;
-      else uniforms.uCapShare.value.y = shares.partner;
+      if (at === 0) uniforms.uCapShare.value.x = share;
+      else uniforms.uCapShare.value.y = share;
     }
   }
 

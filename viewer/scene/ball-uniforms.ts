@@ -26,6 +26,7 @@ export function ballUniforms() {
   };
 }
 
+/** The shared values, by their names in the shaders. */
 export type BallUniforms = ReturnType<typeof ballUniforms>;
 
 /** Write a palette; tints go to the shader as they stand on the display, so that screen and file match. */

@@ -4,6 +4,7 @@ import {
   arrowhead,
   depthFade,
   depthWidth,
+  END_SHARE,
   FUTURE,
   LIT_EDGE,
   lineWidth,
@@ -77,7 +78,7 @@ function arrowAt(
   const width = lineWidth(style, entries.e[row], size) * depthWidth(depth) * (happened ? 1 : FUTURE.width);
   const tint = mix(tintOf(palette, style), paper, happened ? depthFade(depth) : FUTURE.fade);
   if (style === 'other') {
-    return { depth: depth + 0.07, marks: [{ kind: 'circle', x, y, radius: 2 * size, fill: { tint } }] };
+    return { depth: depth + 0.075, marks: [{ kind: 'circle', x, y, radius: 2 * size, fill: { tint } }] };
   }
   const slope = radialSlope(plate, direction);
   const head = arrowhead(width, size);
@@ -85,7 +86,7 @@ function arrowAt(
   if (slope.length * projection.scale * (event.strands.to[strand] - from) < 2.2 * head.length) return null;
   const sign = style === 'antiquark' ? -1 : 1;
   return {
-    depth: depth + 0.07,
+    depth: depth + 0.075,
     marks: triangle(x, y, sign * slope.x, sign * slope.y, head, style === 'antiquark', {
       tint,
       paper,
@@ -175,7 +176,7 @@ export function tickLayers(plate: Plate): Layer[] {
     const points = [x - half * slope.y, y + half * slope.x, x + half * slope.y, y - half * slope.x];
     const tint = mix(palette.ink, palette.lit, depthFade(depth));
     layers.push({
-      depth: depth + 0.06,
+      depth: depth + 0.08,
       marks: [
         { kind: 'polyline', points, stroke: { tint: palette.lit, width: (1.25 + 2 * 1) * size } },
         { kind: 'polyline', points, stroke: { tint, width: 1.25 * size } },
@@ -216,7 +217,7 @@ export function endMark(plate: Plate, row: number, direction: ArrayLike<number>,
     const edge = { tint: palette.lit, width: 3.2 * size };
     const r = (2.4 + 0.16 * width) * size;
     return {
-      depth: depth + 0.09,
+      depth: depth + 0.085,
       marks: [
         { kind: 'circle', x, y, radius: r, stroke: edge },
         { kind: 'circle', x, y, radius: r, fill: { tint: palette.lit }, stroke: ring },
@@ -224,14 +225,14 @@ export function endMark(plate: Plate, row: number, direction: ArrayLike<number>,
     };
   }
   if (style === 'other') {
-    return { depth: depth + 0.09, marks: [{ kind: 'circle', x, y, radius: 2.2 * size, fill: { tint } }] };
+    return { depth: depth + 0.085, marks: [{ kind: 'circle', x, y, radius: 2.2 * size, fill: { tint } }] };
   }
   const slope = radialSlope(plate, direction);
   const anti = style === 'antiquark';
   const sign = anti ? -1 : 1;
   return {
-    depth: depth + 0.09,
-    marks: triangle(x, y, sign * slope.x, sign * slope.y, arrowhead(0.7 * width, size), anti, {
+    depth: depth + 0.085,
+    marks: triangle(x, y, sign * slope.x, sign * slope.y, arrowhead(END_SHARE * width, size), anti, {
       tint,
       paper: palette.lit,
       edge: LIT_EDGE * size,

@@ -33,19 +33,23 @@ export const TIP_LENGTH = 8;
 /** Width of a ring's line [px at size 1], and how far its far half is blended towards the paper. */
 export const RING = { opening: 1.7, partner: 1.4, birth: 1.3, behindFade: 0.58 } as const;
 
-/** How strongly the wash lies on the opening cap and on the partner's: less in the dark, where it is a light. */
-export function washShares(palette: Palette): { opening: number; partner: number } {
-  return luminous(palette) ? { opening: 0.16, partner: 0.32 } : { opening: 0.085, partner: 0.17 };
+/**
+ * How strongly the wash lies on a cap: less in the dark, where it is a light, and less the more of the ball the cap covers, down to
+ * nothing at a right angle, from where on only the ring stays. The partner's lies over the opening's, so that both show.
+ */
+export function washShare(palette: Palette, ring: Ring): number {
+  if (ring.kind === 'birth') return 0;
+  const full = luminous(palette) ? 0.17 : 0.09;
+  return full * Math.max(0, Math.min(1, (PI / 2 - ring.angle) / (PI / 2 - 0.9)));
 }
 
 /** The wash of a selection: inside the opening ring, once more inside the partner ring; none where a ring opens past pi/2. */
 export function washMarks(plate: Plate): Mark[] {
   const { cone, palette } = plate;
   if (!cone) return [];
-  const shares = washShares(palette);
   return cone.rings.flatMap((ring): Mark[] => {
-    const opacity = ring.kind === 'opening' ? shares.opening : ring.kind === 'partner' ? shares.partner : 0;
-    if (opacity === 0 || ring.angle >= PI / 2) return [];
+    const opacity = washShare(palette, ring);
+    if (opacity === 0) return [];
     return [
       {
         kind: 'region',

@@ -37,16 +37,17 @@ export function ballMarks(plate: Plate): Mark[] {
 /**
  * The ball as it stands as a drawing of its own, lettering included.
  *
- * @param ground Whether the paper is tinted; without, the drawing is transparent outside the rim.
+ * @param margin Paper round it [px].
  */
-export function ballDrawing(view: BallView, options: LabelOptions, ground = true): Drawing {
+export function ballDrawing(view: BallView, options: LabelOptions, margin = 0): Drawing {
   const plate = plateOf(view);
   const { still, clock } = letter(plate, options);
   const { head } = view.event.history;
   return {
     width: view.stage.width,
     height: view.stage.height,
-    ground: ground ? view.palette.ground : null,
+    margin,
+    ground: view.palette.ground,
     title: `Event ${head.event}, ${momentText(plate)}`,
     description: describe(plate),
     marks: [...ballMarks(plate), { kind: 'group', name: 'lettering', marks: [...still, ...clock] }],

@@ -6,7 +6,7 @@ export {
   rowAt,
 } from './arrow-marks.ts';
 export { CHAIN } from './chain-marks.ts';
-export { endsOf, RING, RING_DASH, RING_PIECES, TIP_LENGTH, turnPath, washShares } from './cone-marks.ts';
+export { endsOf, RING, RING_DASH, RING_PIECES, TIP_LENGTH, turnPath, washShare } from './cone-marks.ts';
 export { momentText, stepName } from './corners.ts';
 export { ballDrawing, ballMarks } from './drawing.ts';
 export { netLines, SHELL_GAP } from './ground.ts';

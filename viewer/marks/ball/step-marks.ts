@@ -21,11 +21,11 @@ export function stepLayers(plate: Plate): { future: Layer[]; past: Layer[] } {
     if (stepRadius[step] > shell + SAME_RADIUS) {
       const stroke = { tint: mix(palette.hairline, palette.shade, 0.25), width: 1 * size };
       future.push({
-        depth: depth + 0.1,
+        depth: depth + 0.09,
         marks: [{ kind: 'circle', x, y, radius: 0.8 * radius, fill: { tint: palette.shade }, stroke }],
       });
     } else {
-      past.push({ depth: depth + 0.1, marks: ring(plate, x, y, radius, depth) });
+      past.push({ depth: depth + 0.09, marks: ring(plate, x, y, radius, depth) });
     }
   }
   const { x, y } = plate.projection;

@@ -16,7 +16,7 @@ import { mix } from '../tint.ts';
 import type { Layer, Plate } from './plate.ts';
 
 /** Longest piece of a line that is sorted by one depth, in units of the rim's radius. */
-const PIECE = 0.16;
+const PIECE = 0.12;
 
 /** A piece of a strand on the paper, all of it on one side of the current shell. */
 interface Piece {
@@ -25,6 +25,8 @@ interface Piece {
   readonly points: number[];
   /** Path length on the paper from the strand's birth to the piece [px]. */
   readonly along: number;
+  /** Depth of the first point, and the mean of first and last. */
+  readonly first: number;
   depth: number;
 }
 
@@ -55,12 +57,12 @@ function cutStrand(plate: Plate, strand: number): Piece[] {
       const to = between(points, 3 * k, b);
       const pixels = span(to[0] - from[0], to[1] - from[1]);
       if (!open || open.row !== row[k] || open.past !== past || length > PIECE) {
-        open = { row: row[k], past, points: [from[0], from[1]], along, depth: (from[2] + to[2]) / 2 };
+        open = { row: row[k], past, points: [from[0], from[1]], along, first: from[2], depth: from[2] };
         pieces.push(open);
         length = 0;
       }
       open.points.push(to[0], to[1]);
-      open.depth = Math.max(open.depth, (from[2] + to[2]) / 2);
+      open.depth = (open.first + to[2]) / 2;
       length += distance(position, 3 * k) * (b - a);
       along += pixels;
     }
@@ -114,6 +116,7 @@ function lineMarks(plate: Plate, piece: Piece): Mark[] {
   });
 }
 
+/** How a parton's line looks on the paper [px]. */
 export interface LineLook {
   readonly width: number;
   readonly tint: string;

@@ -1,7 +1,7 @@
 import { type BallEvent, strandDirection } from '../../layout/index.ts';
 import {
-  arrowhead,
   arrowRadii,
+  END_SHARE,
   lineWidth,
   rayStart,
   ringRadius,
@@ -43,7 +43,7 @@ export interface Glyph {
   readonly from: number;
   readonly until: number;
   readonly ahead: boolean;
-  /** Length and half-breadth, or radius and line width [px at size 1]. */
+  /** Radius and line width of a ring, length and half-breadth of a tip, reach of a tick [px at size 1]; arrowheads follow `line`. */
   readonly length: number;
   readonly breadth: number;
   /** Width of the line on which it stands [px at size 1]. */
@@ -112,13 +112,10 @@ function arrowGlyphs(event: BallEvent, strand: number): Glyph[] {
     const width = lineWidth(style, entries.e[rowAt({ event }, strand, radius)], 1);
     if (style === 'other')
       return still(direction, radius, { glyph: GLYPHS.dot, ahead: true, length: 2, line: width });
-    const head = arrowhead(width, 1);
     return still(direction, radius, {
       glyph: style === 'antiquark' ? GLYPHS.hollow : GLYPHS.filled,
       tint: GLYPH_TINTS[style],
       ahead: true,
-      length: head.length,
-      breadth: head.half,
       line: width,
       ray: strands.to[strand] - begin,
     });
@@ -169,13 +166,10 @@ export function endLook(id: number, energy: number): Partial<Glyph> {
     };
   }
   if (style === 'other') return { glyph: GLYPHS.dot, length: 2.2, line: width };
-  const head = arrowhead(0.7 * width, 1);
   return {
     glyph: style === 'antiquark' ? GLYPHS.hollow : GLYPHS.filled,
     tint: GLYPH_TINTS[style],
-    length: head.length,
-    breadth: head.half,
-    line: width,
+    line: END_SHARE * width,
   };
 }
 

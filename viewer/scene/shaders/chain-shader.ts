@@ -16,22 +16,35 @@ out float vAcross;
 out float vAlong;
 out float vDepth;
 
+vec3 anyNormal(vec3 a) {
+  vec3 size = abs(a);
+  if (size.x <= size.y && size.x <= size.z) return normalize(vec3(0.0, a.z, -a.y));
+  return size.y <= size.z ? normalize(vec3(-a.z, 0.0, a.x)) : normalize(vec3(a.y, -a.x, 0.0));
+}
+
 void main() {
   float now = uShell + SAME;
   if (now < aSpan.x || now >= aSpan.y) {
     gl_Position = NOWHERE;
     return;
   }
-  vec3 a = uView * turned(aFrom0, aTangent0, aTurn0, uShell);
-  vec3 b = uView * turned(aFrom1, aTangent1, aTurn1, uShell);
-  vec3 tangent = b - dot(a, b) * a;
+  vec3 a = turned(aFrom0, aTangent0, aTurn0, uShell);
+  vec3 b = turned(aFrom1, aTangent1, aTurn1, uShell);
+  float near = dot(a, b);
+  vec3 tangent = b - near * a;
   float across = length(tangent);
   if (across < 1e-5) {
-    gl_Position = NOWHERE;
-    return;
-  }
-  tangent /= across;
-  float angle = atan(across, dot(a, b));
+    if (near > 0.0) {
+      gl_Position = NOWHERE;
+      return;
+    }
+    // Between opposite points every way is as short: the one that layout takes.
+    tangent = anyNormal(a);
+    across = 0.0;
+  } else tangent /= across;
+  float angle = atan(across, near);
+  a = uView * a;
+  tangent = uView * tangent;
   float unit = uShell * uScale;
   float along = 0.0;
   vec2 before = a.xy;
@@ -58,6 +71,7 @@ void main() {
 }
 `;
 
+/** Round ink dots, smaller and paler behind the middle plane. */
 export const CHAIN_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}
 in float vAcross;
 in float vAlong;

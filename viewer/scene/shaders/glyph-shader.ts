@@ -1,6 +1,8 @@
+import { ARROWHEAD } from '../../marks/index.ts';
 import { GLYPHS } from '../build/index.ts';
 import { PAINTING, PLACING, SHARED } from './shared.ts';
 
+const float = (value: number): string => (Number.isInteger(value) ? `${value}.0` : String(value));
 const CODES = Object.entries(GLYPHS)
   .map(([name, code]) => `const int ${name.toUpperCase()} = ${code};`)
   .join('\n');
@@ -35,16 +37,19 @@ void main() {
   int glyph = int(aGlyph.x + 0.5);
   vec3 slope = glyph == TIP ? uView * aTangent : uView * direction;
   float inPaper = length(slope.xy);
-  float size = uSize * (future ? FUTURE_WIDTH : 1.0);
-  bool hidden = aLine.y > 0.0 && inPaper * uScale * aLine.y < 2.2 * aGlyph.z * uSize;
-  if (hidden) {
-    gl_Position = NOWHERE;
-    return;
+  bool arrow = glyph == FILLED || glyph == HOLLOW;
+  vec2 look = aGlyph.zw * uSize * (future && !arrow ? FUTURE_WIDTH : 1.0);
+  if (arrow) {
+    float width = aLine.x * uSize * depthWidth(seen.z) * (future ? FUTURE_WIDTH : 1.0);
+    look = vec2(${float(ARROWHEAD.length)}, ${float(ARROWHEAD.half)}) * uSize + vec2(${float(ARROWHEAD.lengthPerWidth)}, ${float(ARROWHEAD.halfPerWidth)}) * width;
+    // Seen along the line an arrowhead says nothing, and a ray shorter than two of them has no room.
+    if (aLine.y > 0.0 && inPaper * uScale * aLine.y < 2.2 * look.x) {
+      gl_Position = NOWHERE;
+      return;
+    }
   }
   vec2 u = inPaper > 1e-6 ? vec2(slope.x, -slope.y) / inPaper : vec2(0.0, -1.0);
   if (glyph == HOLLOW) u = -u;
-  float growth = glyph == FILLED || glyph == HOLLOW ? depthWidth(seen.z) : 1.0;
-  vec2 look = aGlyph.zw * size * growth;
   if (glyph == RING && future) look = vec2(0.8 * aGlyph.z, 1.0) * uSize;
   if (glyph == TICK) look = vec2(aGlyph.z + 0.5 * aLine.x * depthWidth(seen.z), aGlyph.w) * uSize;
   float reach = max(look.x, look.y) + (EDGE + 1.2) * uSize + 1.0;
@@ -60,6 +65,7 @@ void main() {
 }
 `;
 
+/** Each mark by its distance from the outline, on its edge of paper. */
 export const GLYPH_FRAGMENT = /* glsl */ `${SHARED}${PAINTING}
 ${CODES}
 uniform vec3 uHairline;

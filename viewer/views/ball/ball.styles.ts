@@ -1,5 +1,6 @@
 import { css } from 'lit';
 
+/** The plate fills its box; words that fold the keys stand in the lower corners. */
 export const ballStyles = css`
   :host {
     display: block;

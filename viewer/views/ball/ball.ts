@@ -25,7 +25,7 @@ import { type CameraTurn, cameraAt } from './camera-turn.ts';
 import { type GestureTarget, listenForGestures } from './gestures.ts';
 import { Overlay } from './overlay.ts';
 import { announcementOf, readoutOf } from './readout.ts';
-import { pngOf, svgOf } from './save.ts';
+import { pngOf, type SavedPaper, svgOf } from './save.ts';
 
 /** How near to a branching the pointer must be to mean it [px]. */
 const REACH = 10;
@@ -366,22 +366,23 @@ export class BallElement extends LitElement implements GestureTarget {
   }
 
   /**
-   * The ball as it stands as an SVG file: text as text, vector lines sorted by depth, on tinted paper.
+   * The ball as it stands as an SVG file: text as text, vector lines sorted by depth.
    *
+   * @param paper That of the screen's theme, or white for slides and print.
    * @throws Error while no event is shown.
    */
-  saveSvg(): string {
-    return svgOf(this.#picture, this.#keys());
+  saveSvg(paper: SavedPaper = 'screen'): string {
+    return svgOf(this.#picture, this.#keys(), paper);
   }
 
   /**
    * The ball as it stands as a PNG, all lettering included.
    *
-   * @param scale Dots per CSS pixel.
+   * @param scale Dots per CSS pixel. @param paper As in saveSvg.
    * @throws Error while no event is shown.
    */
-  savePng(scale: number): Promise<Blob> {
-    return pngOf(this.#picture, this.#keys(), scale);
+  savePng(scale: number, paper: SavedPaper = 'screen'): Promise<Blob> {
+    return pngOf(this.#picture, this.#keys(), paper, scale);
   }
 
   /** What the scene holds on the graphics processor; null where the ball is drawn as vector lines. */
