@@ -85,6 +85,14 @@ export {
   thrust,
   worstCoherence,
 } from './measure/index.ts';
+export {
+  type DipoleEnd,
+  DipoleEnds,
+  GapJudge,
+  type GapProbabilities,
+  type NotAssessable,
+  type StepConditionals,
+} from './probability/index.ts';
 export { type AngularCoefficients, angularCoefficients } from './processes/index.ts';
 export {
   antennaAverage,

@@ -24,14 +24,9 @@ export class DipoleEnds {
   readonly assessable = true;
   private readonly kernels: DipoleKernels;
 
-  private constructor(kernels: DipoleKernels) {
+  /** @param kernels GapJudge.endsOf has them. */
+  constructor(kernels: DipoleKernels) {
     this.kernels = kernels;
-  }
-
-  /** Those that a head names, or why there are none. */
-  static of(head: SampleHead): DipoleEnds | NotAssessable {
-    const kernels = openKernels(head);
-    return kernels instanceof DipoleKernels ? new DipoleEnds(kernels) : kernels;
   }
 
   /**

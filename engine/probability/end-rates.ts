@@ -10,7 +10,7 @@ const PANEL = 1;
 const NARROWEST = 0.002;
 const RULE = gaussLegendre(10);
 /** Steps in half rapidity in which a kernel's change of sign is looked for. */
-const STRIDE = 0.3;
+const STRIDE = 0.25;
 
 // scratch, not reentrant
 const values = new Float64Array(3);

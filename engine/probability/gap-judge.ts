@@ -1,7 +1,7 @@
-import { BOOST_COLUMN, type Head, type History } from '../history/index.ts';
+import { BOOST_COLUMN, type History, type SampleHead } from '../history/index.ts';
 import { quarkMass } from '../qcd/index.ts';
 import { Competitors } from './competitors.ts';
-import { openKernels } from './dipole-ends.ts';
+import { DipoleEnds, openKernels } from './dipole-ends.ts';
 import { DipoleKernels } from './dipole-kernels.ts';
 import { type GapProbabilities, judgeGaps } from './gap-probabilities.ts';
 import { type NotAssessable, notAssessable } from './kernel-settings.ts';
@@ -19,7 +19,7 @@ const CONDITIONAL_COLUMNS = ['z', 'channel', 'emitter', 'partner', 'i', 'j'] as 
  * settings are made at its first event and kept for the next ones of the same settings.
  */
 export class GapJudge {
-  private shower: Head['shower'] | null = null;
+  private shower: SampleHead['shower'] | null = null;
   private fingerprint = '';
   private kernels: DipoleKernels | NotAssessable = notAssessable('no event yet');
   private readonly competitors = new Competitors();
@@ -31,13 +31,13 @@ export class GapJudge {
    * Accuracy: 1e-6 of each exponent, absolute, and better than 1e-7 for one dipole end.
    */
   gapsOf(history: History): GapProbabilities | NotAssessable {
-    const kernels = this.kernelsOf(history);
+    const kernels = this.kernelsOf(history.head);
     return kernels instanceof DipoleKernels ? judgeGaps(history, kernels, this.dipoles) : kernels;
   }
 
   /** Distribution of z, and of end and channel, at each step's own t, or why there is none. */
   conditionalsOf(history: History): StepConditionals | NotAssessable {
-    const kernels = this.kernelsOf(history);
+    const kernels = this.kernelsOf(history.head);
     if (!(kernels instanceof DipoleKernels)) return kernels;
     for (const name of CONDITIONAL_COLUMNS)
       if (!history.head.columns.steps.includes(name))
@@ -45,11 +45,17 @@ export class GapJudge {
     return judgeConditionals(history, kernels, this.dipoles, this.competitors);
   }
 
+  /** Rates of single dipole ends by the kernels that a head names, from the same tables, or why there are none. */
+  endsOf(head: SampleHead): DipoleEnds | NotAssessable {
+    const kernels = this.kernelsOf(head);
+    return kernels instanceof DipoleKernels ? new DipoleEnds(kernels) : kernels;
+  }
+
   private massOf(id: number): number {
     return this.kernels instanceof DipoleKernels && this.kernels.settings.masses ? quarkMass(id) : 0;
   }
 
-  private kernelsOf({ head }: History): DipoleKernels | NotAssessable {
+  private kernelsOf(head: SampleHead): DipoleKernels | NotAssessable {
     // events of one file share the record of their settings
     if (head.shower !== this.shower) {
       this.shower = head.shower;
@@ -64,7 +70,7 @@ export class GapJudge {
   }
 }
 
-function makeKernels(head: Head): DipoleKernels | NotAssessable {
+function makeKernels(head: SampleHead): DipoleKernels | NotAssessable {
   for (const name of ENTRY_COLUMNS)
     if (!head.columns.entries.includes(name)) return notAssessable(`column ${name} of the entries is absent`);
   for (const name of STEP_COLUMNS)
