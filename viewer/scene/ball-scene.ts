@@ -178,6 +178,8 @@ export class BallScene {
 
   /** Take a size [CSS px]. @param pixelRatio Device pixels per CSS pixel. */
   setStage(stage: Stage, pixelRatio: number): void {
+    // Setting a size, the same one too, gives the canvas new memory.
+    if (stage === this.#stage && pixelRatio === this.#uniforms.uPixel.value) return;
     this.#stage = stage;
     this.#renderer.setPixelRatio(pixelRatio);
     this.#renderer.setSize(stage.width, stage.height, false);

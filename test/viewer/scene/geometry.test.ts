@@ -22,6 +22,7 @@ import {
   type Quads,
   strandQuads,
 } from '../../../viewer/scene/build/index.ts';
+import { historyByHand } from '../../engine/history-by-hand.ts';
 import { anyEvent, denseEvent, silentEvent, teraEvent } from '../layout/events.ts';
 
 const each = (claim: (event: BallEvent) => void, runs = 40): void =>
@@ -82,6 +83,22 @@ describe('geometry of the scene', () => {
       }
       expect(glyphs.filter((g) => g.glyph === GLYPHS.ring).length).toBe(steps.length);
     });
+  });
+
+  it('marks a parton of no other style by a dot at each quarter of its ray and one at its end', () => {
+    const history = historyByHand(
+      [
+        { id: 11, px: 10, py: 0, pz: 0, e: 10, from: -1, madeBy: -1, endedBy: -1 },
+        { id: 1, px: -10, py: 0, pz: 0, e: 10, from: -1, madeBy: -1, endedBy: -1 },
+      ],
+      [],
+    );
+    const dots = eventGlyphs(ballEvent(history)).filter(({ glyph }) => glyph === GLYPHS.dot);
+    const [start, end] = [0.1, 1];
+    expect(dots.filter(({ radius }) => radius >= 0).map(({ radius }) => radius)).toEqual(
+      [0.25, 0.5, 0.75].map((share) => expect.closeTo(start + share * (end - start), 9)),
+    );
+    expect(dots.filter(({ radius }) => radius === -1).length).toBe(1);
   });
 
   it('shows at any time as many chain arcs as there are dipoles', () => {
