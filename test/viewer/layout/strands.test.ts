@@ -9,7 +9,6 @@ import {
   radiusAt,
   type Strands,
   strandDirection,
-  TURN_FRACTION,
   traceChains,
   traceStrands,
 } from '../../../viewer/layout/index.ts';
@@ -93,7 +92,7 @@ describe('strands', () => {
         const angle = turns.angle[turn];
         const extent = strands.to[strand] - strands.from[strand];
         if (turnStart[strand + 1] - turn > 1 || angle < 1e-3 || extent < 1e-6) continue;
-        const height = TURN_FRACTION * extent;
+        const height = 0.1 * extent;
         const turnedAt = (share: number): number => {
           const at = new Float64Array(3);
           strandDirection(at, 0, strands, strand, strands.from[strand] + share * height);
