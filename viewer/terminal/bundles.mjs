@@ -1,5 +1,5 @@
-// What is built and how: Vite settings of the page and of the command line. There is no vite.config file, so that a build
-// depends on nothing but these lines.
+// What is built and how: Vite settings of the page and of the command line. They read no vite.config.ts, which is for the
+// development server, so that a build depends on nothing but these lines.
 import { readFileSync } from 'node:fs';
 import { join, relative } from 'node:path';
 
