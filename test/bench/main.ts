@@ -1,5 +1,6 @@
 import { type EngineFigures, engineTable } from './engine.ts';
 import { type FileFigures, fileBench } from './file.ts';
+import { type SceneFigures, sceneTable } from './scene.ts';
 import { type StartFigures, startTable } from './start-up.ts';
 
 function printEngine(rows: readonly EngineFigures[]): void {
@@ -46,6 +47,17 @@ function printFile(rows: readonly FileFigures[]): void {
   }
 }
 
+function printScene(rows: readonly SceneFigures[]): void {
+  console.log('ball at 1280 x 720 on the software renderer');
+  console.log(
+    ['steps', 'frames/s', 'cpu ms/frame', 'cpu/kilocalib'].map((head) => head.padStart(14)).join(''),
+  );
+  for (const { words, steps, framesPerSecond, cpuMs, ratio } of rows) {
+    const figures = [String(steps), framesPerSecond.toFixed(1), cpuMs.toFixed(1), ratio.toFixed(1)];
+    console.log(`${figures.map((figure) => figure.padStart(14)).join('')}   ${words}`);
+  }
+}
+
 const parts: Record<string, () => void | Promise<void>> = {
   engine: () => printEngine(engineTable()),
   file: async () =>
@@ -53,6 +65,7 @@ const parts: Record<string, () => void | Promise<void>> = {
       await fileBench('91.1876 GeV', {}, 6400),
       await fileBench('1000 GeV, trials', { energy: 1000, trials: true }, 1280),
     ]),
+  scene: async () => printScene(await sceneTable()),
   'start-up': () => printStart(startTable()),
 };
 
