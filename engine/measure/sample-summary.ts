@@ -1,4 +1,4 @@
-import { type History, KINDS } from '../history/index.ts';
+import { type History, KINDS, ROLES } from '../history/index.ts';
 import { durham, jetCount } from './durham.ts';
 import { finalMomenta } from './final-momenta.ts';
 import { type FractionSpectrum, FractionSpectrumCollector } from './fraction-spectrum.ts';
@@ -11,6 +11,8 @@ import { thrust } from './thrust.ts';
 export const DEFAULT_Y_CUTS: readonly number[] = [0.1, 0.03, 0.01, 0.003, 0.001];
 
 const ONE_TO_TWO = KINDS.indexOf('one-to-two');
+const EMITTER = ROLES.indexOf('emitter');
+const EMISSION = ROLES.indexOf('emission');
 const CHARM = 4;
 const BOTTOM = 5;
 
@@ -141,7 +143,7 @@ export class SampleSummary {
 
   /** Means over steps. A hard parton's own birth angle is pi, so in coherent branching its steps say nothing. */
   private addFractions(history: History): void {
-    const { steps, head } = history;
+    const { steps, entries, head } = history;
     const measures = measureSteps(history, this.measures);
     this.measures = measures;
     const { openingAngle, birthAngle, partnerAngle } = measures;
@@ -156,8 +158,9 @@ export class SampleSummary {
         rejected += steps.rejected[step];
         recorded++;
       }
-      // coherent: the steps whose emitter came from a step
-      const assessable = steps.kind[step] !== ONE_TO_TWO || steps.previous[step] >= 0;
+      // coherent: the steps whose emitter came from a step, not from the hard process as a reconstructed jet root
+      const role = entries.role[steps.emitter[step]];
+      const assessable = steps.kind[step] !== ONE_TO_TWO || role === EMITTER || role === EMISSION;
       if (assessable && openingAngle[step] >= 0 && birthAngle[step] >= 0) {
         withBirth++;
         if (openingAngle[step] > birthAngle[step]) aboveBirth++;
