@@ -42,6 +42,8 @@ export interface GrowSettings {
   readonly trials: boolean;
 }
 
+const QUARK_LETTERS = ['d', 'u', 's', 'c', 'b'] as const;
+
 /** The defaults of the command line; they never change. */
 export const DEFAULT_SETTINGS: GrowSettings = {
   process: 'ee',
@@ -140,7 +142,7 @@ export function resolveSettings(some: Partial<GrowSettings> = {}): GrowSettings 
   demand(
     all.quark === null || all.process === 'ee',
     'quark',
-    all.quark,
+    all.quark === null ? null : QUARK_LETTERS[all.quark - 1],
     `no quark: ${all.process} makes its own partons`,
   );
   demand(
@@ -266,8 +268,6 @@ export function makeCoupling(settings: GrowSettings): RunningCoupling {
     highest: settings.energy,
   });
 }
-
-const QUARK_LETTERS = ['d', 'u', 's', 'c', 'b'] as const;
 
 /** Settings under their command-line names, as a history's head keeps them. Seed and sample size stand elsewhere. */
 export function describeSettings(settings: GrowSettings): Record<string, SettingValue> {
