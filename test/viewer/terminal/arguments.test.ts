@@ -72,7 +72,7 @@ describe('refused, naming the option or argument and what it takes', () => {
     [['--coherence', 'off'], /--coherence off: expected on with --shower dipole/],
     [['--recoil', 'global', '--masses', 'on'], /--(recoil|masses) /],
     [['--shower', 'coherent', '--order', 'virtuality'], /--order virtuality: expected kt with/],
-    [['--process', 'scalar-gg', '--quark', 'd'], /--quark 1: expected no quark/],
+    [['--process', 'scalar-gg', '--quark', 'd'], /--quark d: expected no quark/],
   ])('settings that make no sense: grow %j', (words, said) =>
     expectRefused('grow', [...words, ...OUT], 'setting', said),
   );
