@@ -138,7 +138,7 @@ export class DipoleShower implements Grower, TrialListener {
       rerun: null,
       status: 'complete',
       statusReason: null,
-      outgoing: [...this.process.outgoing],
+      outgoing: [this.process.outgoing[0], this.process.outgoing[1]],
       weight: 1,
     });
     this.batch = null;
