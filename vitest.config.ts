@@ -9,6 +9,7 @@ export default defineConfig({
       'test/reference/**',
       'test/laws/**',
       'test/engine/shower/coherent/**',
+      'test/engine/probability/**',
       'test/engine/math/accuracy.test.ts',
       'test/browser/**',
       'test/terminal/**',

@@ -8,6 +8,7 @@ export default defineConfig({
       'test/reference/**/*.test.ts',
       'test/laws/**/*.test.ts',
       'test/engine/shower/coherent/**/*.test.ts',
+      'test/engine/probability/**/*.test.ts',
       'test/engine/math/accuracy.test.ts',
     ],
     exclude: ['**/*.long.test.ts'],
