@@ -6,6 +6,8 @@ import { type NotAssessable, notAssessable, readKernelSettings } from './kernel-
 
 // scratch, not reentrant
 const numbers = new Float64Array(CHANNELS.length);
+const place = new Float64Array(1);
+const rest = new Float64Array(1);
 
 /** The kernels that a head names, ready to be integrated, or why there are none. */
 export function openKernels(head: SampleHead): DipoleKernels | NotAssessable {
@@ -37,12 +39,12 @@ export class DipoleEnds {
    */
   exponent(end: DipoleEnd, tLow: number, tHigh: number): number {
     const { table } = this.kernels.familyOf(end);
-    const place = placeOf(table.channels, end);
+    const channel = placeOf(table.channels, end);
     if (!table.enter(end.q2)) return 0;
     table.upTo(numbers, log(tHigh));
-    const high = numbers[place];
+    const high = numbers[channel];
     table.upTo(numbers, log(tLow));
-    return high - numbers[place];
+    return high - numbers[channel];
   }
 
   /** Rate per unit of ln t. Accuracy: 1e-9 relative, by quadrature. */
@@ -65,7 +67,9 @@ export class DipoleEnds {
     const range = this.range(end, t);
     if (range === null || !(z > range[0] && z < range[1])) return 0;
     density.begin(t, end.q2);
-    density.at(numbers, z, 1 - z);
+    place[0] = z;
+    rest[0] = 1 - z;
+    density.fill(numbers, place, rest, 1);
     // a negative kernel is no rate
     return Math.max(0, numbers[placeOf(density.channels, end)]);
   }

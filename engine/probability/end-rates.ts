@@ -12,9 +12,15 @@ const RULE = gaussLegendre(10);
 /** Steps in half rapidity in which a kernel's change of sign is looked for. */
 const STRIDE = 0.25;
 
+/** Most points at which a kernel's sign is looked at, three to a stride. */
+const MOST_STRIDES = 250;
+
 // scratch, not reentrant
-const values = new Float64Array(3);
-const panelSum = new Float64Array(3);
+const zs = new Float64Array(3 * (MOST_STRIDES + 1));
+const ws = new Float64Array(3 * (MOST_STRIDES + 1));
+const values = new Float64Array(3 * RULE.nodes.length);
+const kernels = new Float64Array(9 * (MOST_STRIDES + 1));
+const single = new Float64Array(3);
 
 /** Rates of a dipole end per unit of ln t, integrated over z, by quadrature of its kernels. */
 export interface EndRates {
@@ -94,7 +100,7 @@ export class QuadratureRates implements EndRates {
           cuts.push(space.low, space.high);
     this.density.begin(t, q2);
     const { signed } = this;
-    if (signed !== null) for (let c = 0; c < count; c++) this.cutAtZeros(signed, c, low, high);
+    if (signed !== null) this.cutAtZeros(signed, count, low, high);
     cuts.sort(ascending);
     for (let n = 0; n + 1 < cuts.length && cuts[n] < last; n++) {
       let from = cuts[n];
@@ -111,57 +117,76 @@ export class QuadratureRates implements EndRates {
     }
   }
 
-  /** Cut where kernel c changes its sign, between points a stride apart or twice between two of them. */
-  private cutAtZeros(density: SignedDensity, c: number, low: number, high: number): void {
-    const at = (b: number): number => {
-      const w = 1 / (1 + exp(2 * b));
-      density.kernels(values, 1 - w, w);
-      return values[c];
-    };
-    const strides = Math.ceil((high - low) / STRIDE);
+  /** Cut where a kernel changes its sign, between points a stride apart or twice between two of them. */
+  private cutAtZeros(density: SignedDensity, count: number, low: number, high: number): void {
+    const strides = Math.min(Math.ceil((high - low) / STRIDE), MOST_STRIDES);
     // the very ends may lie outside by rounding
     const inset = 1e-9 * (high - low);
     const width = (high - low - 2 * inset) / strides;
     const near = 1e-5 * width;
-    let a = low + inset;
-    let fa = at(a);
-    let slopeA = at(a + near) - fa;
-    for (let n = 0; n < strides; n++) {
-      const b = a + width;
-      const fb = at(b);
-      const slopeB = fb - at(b - near);
-      if (fa < 0 !== fb < 0) this.cuts.push(findRoot(at, a, b, ROOT));
-      else {
-        const sign = fa < 0 ? -1 : 1;
-        // both ends lean towards zero: where their tangents meet, a convex function lies no lower
-        const falls = (-sign * slopeA) / near;
-        const rises = (sign * slopeB) / near;
-        const least = (sign * (fa * rises + fb * falls) - width * falls * rises) / (falls + rises);
-        const x = falls > 0 && rises > 0 && least < 0 ? otherSign(at, a, b, sign) : null;
-        if (x !== null) this.cuts.push(findRoot(at, a, x, ROOT), findRoot(at, x, b, ROOT));
+    // each point, and one close to it on either side for the slope
+    const points = 3 * (strides + 1);
+    for (let n = 0; n <= strides; n++)
+      for (let side = -1; side <= 1; side++) {
+        const inward = n === 0 && side < 0 ? 0 : n === strides && side > 0 ? 0 : side;
+        setPoint(3 * n + 1 + side, low + inset + n * width + inward * near);
       }
-      a = b;
-      fa = fb;
-      slopeA = at(b + near) - fb;
+    density.kernels(kernels, zs, ws, points);
+    for (let c = 0; c < count; c++) {
+      const at = (b: number): number => {
+        setPoint(0, b);
+        density.kernels(single, zs, ws, 1);
+        return single[c];
+      };
+      for (let n = 0; n < strides; n++) {
+        const first = c * points + 3 * n;
+        const a = low + inset + n * width;
+        const fa = kernels[first + 1];
+        const fb = kernels[first + 4];
+        if (fa < 0 !== fb < 0) {
+          this.cuts.push(findRoot(at, a, a + width, ROOT));
+          continue;
+        }
+        const sign = fa < 0 ? -1 : 1;
+        // where both ends lean towards zero: where their tangents meet, a convex function lies no lower
+        const falls = (sign * (fa - kernels[first + 2])) / near;
+        const rises = (sign * (fb - kernels[first + 3])) / near;
+        if (!(falls > 0 && rises > 0)) continue;
+        const least = sign * (fa * rises + fb * falls) - width * falls * rises;
+        const x = least < 0 ? otherSign(at, a, a + width, sign) : null;
+        if (x !== null) this.cuts.push(findRoot(at, a, x, ROOT), findRoot(at, x, a + width, ROOT));
+      }
     }
   }
 
   /** Add one panel, in which no rate changes its sign. */
   private panel(out: Float64Array, count: number, from: number, to: number): void {
     const { nodes, weights } = RULE;
+    const points = nodes.length;
     const middle = 0.5 * (from + to);
     const half = 0.5 * (to - from);
-    for (let c = 0; c < count; c++) panelSum[c] = 0;
-    for (let k = 0; k < nodes.length; k++) {
-      const weight = 2 * half * weights[k] * evaluate(this.density, middle + half * nodes[k]);
-      for (let c = 0; c < count; c++) panelSum[c] += weight * values[c];
+    for (let k = 0; k < points; k++) setPoint(k, middle + half * nodes[k]);
+    this.density.fill(values, zs, ws, points);
+    for (let c = 0; c < count; c++) {
+      let sum = 0;
+      // dz = 2 z(1-z) db
+      for (let k = 0; k < points; k++) sum += weights[k] * zs[k] * ws[k] * values[c * points + k];
+      // a negative kernel is no rate
+      if (sum > 0) out[c] += 2 * half * sum;
     }
-    // a negative kernel is no rate
-    for (let c = 0; c < count; c++) out[c] += Math.max(0, panelSum[c]);
   }
 }
 
 const ascending = (a: number, b: number): number => a - b;
+
+/** z and 1 - z of half rapidity b, the smaller of the two from the exponential. */
+function setPoint(k: number, b: number): void {
+  const e = exp(b < 0 ? 2 * b : -2 * b);
+  const large = 1 / (1 + e);
+  const small = e * large;
+  zs[k] = b < 0 ? small : large;
+  ws[k] = b < 0 ? large : small;
+}
 
 /**
  * Where between a and b a function of one extremum has the other sign than at both ends; null where not.
@@ -195,16 +220,6 @@ function otherSign(f: (x: number) => number, a: number, b: number, sign: number)
 
 const GOLDEN = 0.3819660112501051;
 const ROOT = { tolerance: 1e-12 };
-
-/** Densities at half rapidity b, into values. @returns z(1-z), which is half of dz/db. */
-function evaluate(density: ZDensity, b: number): number {
-  // the smaller of z and 1-z from the exponential
-  const e = exp(b < 0 ? 2 * b : -2 * b);
-  const large = 1 / (1 + e);
-  const small = e * large;
-  density.at(values, b < 0 ? small : large, b < 0 ? large : small);
-  return small * large;
-}
 
 /** Massless ends in kt ordering, in closed form. Accuracy: 1e-12 of the largest rate. */
 export class MasslessKtRates implements EndRates {

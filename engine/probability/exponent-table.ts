@@ -6,7 +6,7 @@ import { type CellSource, ExponentCells } from './exponent-cells.ts';
 
 /** Absolute, of the integral over one cell. */
 const TOLERANCE = 3e-8;
-const RULE = chebyshevRule(8);
+const RULE = chebyshevRule(10);
 const ONE = chebyshevRule(1);
 
 /** A range of ln Q^2 with its edges along ln t, and the cells between each and the next. */

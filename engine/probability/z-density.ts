@@ -19,16 +19,20 @@ export interface ZDensity {
   /** Fix t and Q^2 [GeV^2]. */
   begin(t: number, q2: number): void;
   /**
-   * Rates at z inside phase space, w = 1 - z with its own digits; g -> q qbar of one flavour. A negative number stands
-   * for no rate.
+   * Rates at points inside phase space, of the first channel at all of them, then of the second and so on.
+   *
+   * Many at once, because every number that crosses a call becomes an object where the compiler does not inline it.
+   *
+   * @param zs, @param ws z and 1 - z with its own digits, `count` of each.
+   * @param out g -> q qbar of one flavour; a negative number stands for no rate.
    */
-  at(out: Float64Array, z: number, w: number): void;
+  fill(out: Float64Array, zs: Float64Array, ws: Float64Array, count: number): void;
 }
 
 /** A density whose kernels may turn negative. */
 export interface SignedDensity extends ZDensity {
-  /** The kernels alone, which have the signs of the densities and no zeros of phase space; returns s_ij [GeV^2]. */
-  kernels(out: Float64Array, z: number, w: number): number;
+  /** The kernels alone, which have the signs of the densities and no zeros of phase space; as `fill`. */
+  kernels(out: Float64Array, zs: Float64Array, ws: Float64Array, count: number): void;
 }
 
 /**
@@ -58,22 +62,27 @@ export class MasslessDensity implements ZDensity {
     if (!this.virtuality) this.couple(t);
   }
 
-  at(out: Float64Array, z: number, w: number): void {
-    const { virtuality, x, correction } = this;
-    const y = virtuality ? x : x / (z * w);
-    if (virtuality) this.couple(z * w * this.t);
-    const { soft, plain } = this;
-    const rest = Math.max(0, 1 - y);
-    // 1 - z(1-y) = w + z y
-    const pole = 1 / (w + z * y);
-    out[0] = soft * rest * CF * (2 * pole - 1 - z);
-    out[1] = soft * rest * CA * (pole - 1 + 0.5 * z * w);
-    out[2] = plain * rest * (TR / 2) * (1 - 2 * z * w);
-    if (correction === null || rest === 0) return;
-    const ratio = correction.emission(z, y);
-    out[0] *= ratio;
-    out[1] *= ratio;
-    out[2] *= correction.splitting(z, y);
+  fill(out: Float64Array, zs: Float64Array, ws: Float64Array, count: number): void {
+    const { virtuality, x, t, correction } = this;
+    for (let k = 0; k < count; k++) {
+      const z = zs[k];
+      const w = ws[k];
+      const y = virtuality ? x : x / (z * w);
+      if (virtuality) this.couple(z * w * t);
+      const { soft, plain } = this;
+      const rest = Math.max(0, 1 - y);
+      // 1 - z(1-y) = w + z y
+      const pole = 1 / (w + z * y);
+      let ofGluon = 1;
+      let ofPair = 1;
+      if (correction !== null && rest > 0) {
+        ofGluon = correction.emission(z, y);
+        ofPair = correction.splitting(z, y);
+      }
+      out[k] = ofGluon * soft * rest * CF * (2 * pole - 1 - z);
+      out[count + k] = ofGluon * soft * rest * CA * (pole - 1 + 0.5 * z * w);
+      out[2 * count + k] = ofPair * plain * rest * (TR / 2) * (1 - 2 * z * w);
+    }
   }
 
   private couple(kT2: number): void {
@@ -131,39 +140,55 @@ export class MassiveDensity implements SignedDensity {
     this.flow = Math.sqrt(q2 * q2 - 4 * this.mij2 * this.mk2);
   }
 
-  at(out: Float64Array, z: number, w: number): void {
+  fill(out: Float64Array, zs: Float64Array, ws: Float64Array, count: number): void {
     const { channels, strength, virtuality, t, qBar2, flow, mij2, mi2, mj2 } = this;
-    const s = this.kernels(out, z, w);
-    const y = (s - mi2 - mj2) / qBar2;
-    const lnKT2 = virtuality ? log(z * w * s - w * mi2 - z * mj2) : this.lnT;
-    const plain = strength.plain(lnKT2);
-    const soft = strength.soft(lnKT2, plain);
-    // (1-y) F Qb^2/sqrt(lambda)
-    const front = ((1 - y) * qBar2 * (virtuality ? 1 : t / (z * w * (s - mij2)))) / flow;
-    for (let c = 0; c < channels.length; c++) out[c] *= front * (channels[c] === G_QQ ? plain : soft);
+    this.kernels(out, zs, ws, count);
+    for (let k = 0; k < count; k++) {
+      const z = zs[k];
+      const w = ws[k];
+      const twicePiPj = this.twicePiPj(z, w);
+      const s = twicePiPj + mi2 + mj2;
+      const lnKT2 = virtuality ? log(z * w * s - w * mi2 - z * mj2) : this.lnT;
+      const plain = strength.plain(lnKT2);
+      const soft = strength.soft(lnKT2, plain);
+      // (1-y) F Qb^2/sqrt(lambda)
+      const front = ((qBar2 - twicePiPj) * (virtuality ? 1 : t / (z * w * (s - mij2)))) / flow;
+      for (let c = 0; c < channels.length; c++)
+        out[c * count + k] *= front * (channels[c] === G_QQ ? plain : soft);
+    }
   }
 
-  kernels(out: Float64Array, z: number, w: number): number {
-    const { channels, virtuality, t, q2, qBar2, flow, mij2, mi2, mj2, mk2 } = this;
-    const twicePiPj = virtuality ? t + mij2 - mi2 - mj2 : (t + w * w * mi2 + z * z * mj2) / (z * w);
-    const y = twicePiPj / qBar2;
-    const s = twicePiPj + mi2 + mj2;
-    // v^2 = lambda(Q^2,s,mk^2)/(Q^2-s-mk^2)^2
-    const apart = q2 + mij2 - s;
-    const v2 = mk2 === 0 ? 1 : Math.max(1 - (4 * s * mk2) / (apart * apart), LEAST_V2);
-    const perV = this.published ? 1 / Math.sqrt(v2) : 1;
-    const pole = 1 / (w + z * y);
-    for (let c = 0; c < channels.length; c++) {
-      if (channels[c] === Q_QG) {
-        const r1 = this.published ? (flow / q2) * perV : 1;
-        out[c] = CF * (2 * pole - r1 * (1 + z + (2 * mi2) / twicePiPj));
-        continue;
+  kernels(out: Float64Array, zs: Float64Array, ws: Float64Array, count: number): void {
+    const { channels, q2, qBar2, flow, mij2, mi2, mj2, mk2, published } = this;
+    for (let k = 0; k < count; k++) {
+      const z = zs[k];
+      const w = ws[k];
+      const twicePiPj = this.twicePiPj(z, w);
+      const s = twicePiPj + mi2 + mj2;
+      // v^2 = lambda(Q^2,s,mk^2)/(Q^2-s-mk^2)^2
+      const apart = q2 + mij2 - s;
+      const v2 = mk2 === 0 ? 1 : Math.max(1 - (4 * s * mk2) / (apart * apart), LEAST_V2);
+      const perV = published ? 1 / Math.sqrt(v2) : 1;
+      const pole = 1 / (w + (z * twicePiPj) / qBar2);
+      for (let c = 0; c < channels.length; c++) {
+        let kernel: number;
+        if (channels[c] === Q_QG) {
+          const r1 = published ? (flow / q2) * perV : 1;
+          kernel = CF * (2 * pole - r1 * (1 + z + (2 * mi2) / twicePiPj));
+        } else {
+          // m_i = m_j here: z_+ z_- = [1 - v^2 (1 - 4 m^2/s)]/4
+          const inner = z * w - 0.25 * (1 - v2 * (1 - (4 * mi2) / s));
+          if (channels[c] === G_GG) kernel = CA * (pole - perV * (1 - 0.5 * inner));
+          else kernel = (TR / 2) * perV * (1 - 2 * inner);
+        }
+        out[c * count + k] = kernel;
       }
-      // m_i = m_j here: z_+ z_- = [1 - v^2 (1 - 4 m^2/s)]/4
-      const inner = z * w - 0.25 * (1 - v2 * (1 - (4 * mi2) / s));
-      if (channels[c] === G_GG) out[c] = CA * (pole - perV * (1 - 0.5 * inner));
-      else out[c] = (TR / 2) * perV * (1 - 2 * inner);
     }
-    return s;
+  }
+
+  /** 2 pi.pj [GeV^2], which is y Qb^2. */
+  private twicePiPj(z: number, w: number): number {
+    const { virtuality, t, mij2, mi2, mj2 } = this;
+    return virtuality ? t + mij2 - mi2 - mj2 : (t + w * w * mi2 + z * z * mj2) / (z * w);
   }
 }

@@ -1,5 +1,6 @@
 import { type EngineFigures, engineTable } from './engine.ts';
 import { type FileFigures, fileBench } from './file.ts';
+import { type GapFigures, gapTable } from './gaps.ts';
 import { type SceneFigures, sceneTable } from './scene.ts';
 import { type StartFigures, startTable } from './start-up.ts';
 
@@ -58,6 +59,23 @@ function printScene(rows: readonly SceneFigures[]): void {
   }
 }
 
+function printGaps(rows: readonly GapFigures[]): void {
+  console.log('no-emission probabilities of events in memory, one thread, fastest of seven rounds');
+  const heads = ['gaps/event', 'us/gap', 'gap/calib.', 'us/step', 'step/calib.', 'tables ms'];
+  console.log(heads.map((head) => head.padStart(12)).join(''));
+  for (const row of rows) {
+    const figures = [
+      row.gapsPerEvent.toFixed(1),
+      row.microsecondsPerGap.toFixed(2),
+      row.gapRatio.toFixed(0),
+      row.microsecondsPerStep.toFixed(2),
+      row.stepRatio.toFixed(0),
+      row.tablesMs.toFixed(0),
+    ];
+    console.log(`${figures.map((figure) => figure.padStart(12)).join('')}   ${row.label}`);
+  }
+}
+
 const parts: Record<string, () => void | Promise<void>> = {
   engine: () => printEngine(engineTable()),
   file: async () =>
@@ -65,6 +83,7 @@ const parts: Record<string, () => void | Promise<void>> = {
       await fileBench('91.1876 GeV', {}, 6400),
       await fileBench('1000 GeV, trials', { energy: 1000, trials: true }, 1280),
     ]),
+  gaps: () => printGaps(gapTable()),
   scene: async () => printScene(await sceneTable()),
   'start-up': () => printStart(startTable()),
 };

@@ -33,7 +33,8 @@ function slowly(
   const f = (b: number): number => {
     const e = exp(-2 * Math.abs(b));
     const [small, large] = [e / (1 + e), 1 / (1 + e)];
-    density.at(one, b < 0 ? small : large, b < 0 ? large : small);
+    const [z, w] = b < 0 ? [small, large] : [large, small];
+    density.fill(one, Float64Array.of(z), Float64Array.of(w), 1);
     return 2 * small * large * Math.max(0, one[c]);
   };
   let sum = 0;

@@ -23,7 +23,7 @@ describe('the densities in z', () => {
     for (let n = 0; n < 200; n++) {
       const [z, y, q2] = [random(), random(), 1e4];
       density.begin(virtuality ? y * q2 : z * (1 - z) * y * q2, q2);
-      density.at(out, z, 1 - z);
+      density.fill(out, Float64Array.of(z), Float64Array.of(1 - z), 1);
       const emission = (1 - y) * scalarToGluons.emission(z, y);
       const splitting = (1 - y) * scalarToGluons.splitting(z, y);
       expect(out[0] / (emission * kernelQuark(z, y))).toBeCloseTo(1, 11);
@@ -60,7 +60,7 @@ describe('the densities in z', () => {
       inside++;
       const density = new MassiveDensity(virtuality, factors, fixed, masses, channels);
       density.begin(t, q2);
-      density.at(out, z, w);
+      density.fill(out, Float64Array.of(z), Float64Array.of(w), 1);
       for (let c = 0; c < channels.length; c++) {
         point.find(channels[c], t, z, w);
         if (out[c] < 0) negative++;
