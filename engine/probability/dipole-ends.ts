@@ -47,7 +47,7 @@ export class DipoleEnds {
     return high - numbers[channel];
   }
 
-  /** Rate per unit of ln t. Accuracy: 1e-9 relative, by quadrature. */
+  /** Rate per unit of ln t. Accuracy: 1e-8, by quadrature. */
   rate(end: DipoleEnd, t: number): number {
     const { rates } = this.kernels.familyOf(end);
     rates.rates(numbers, t, end.q2);

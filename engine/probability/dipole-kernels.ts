@@ -38,7 +38,8 @@ const KINDS = [0, quarkMass(4), quarkMass(5)];
 /**
  * Everything that one set of settings needs, made when it is first asked for.
  *
- * A massless family takes some 10 to 50 ms to tabulate, a massive one up to a second (published velocity factors).
+ * A massless family takes 10 to 100 ms to tabulate, a massive one 20 to 200 ms, with published velocity factors up to
+ * 1.3 s; an event with heavy quarks may need five of them, all events together fifteen.
  */
 export class DipoleKernels {
   readonly settings: KernelSettings;
@@ -63,6 +64,11 @@ export class DipoleKernels {
   kindOf(id: number): number {
     const flavour = Math.abs(id);
     return this.settings.masses && (flavour === 4 || flavour === 5) ? flavour - 3 : LIGHT;
+  }
+
+  /** Mass [GeV] that the kernels give a parton, by PDG number. */
+  massOf(id: number): number {
+    return KINDS[this.kindOf(id)];
   }
 
   /**

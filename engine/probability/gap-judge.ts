@@ -1,5 +1,4 @@
 import { BOOST_COLUMN, type History, type SampleHead } from '../history/index.ts';
-import { quarkMass } from '../qcd/index.ts';
 import { Competitors } from './competitors.ts';
 import { DipoleEnds, openKernels } from './dipole-ends.ts';
 import { DipoleKernels } from './dipole-kernels.ts';
@@ -19,7 +18,8 @@ const CONDITIONAL_COLUMNS = ['z', 'channel', 'emitter', 'partner', 'i', 'j'] as 
  * settings are made at its first event and kept for the next ones of the same settings.
  */
 export class GapJudge {
-  private shower: SampleHead['shower'] | null = null;
+  /** Head of the last event, and what of it the kernels depend on as text. */
+  private known: SampleHead | null = null;
   private fingerprint = '';
   private kernels: DipoleKernels | NotAssessable = notAssessable('no event yet');
   private readonly competitors = new Competitors();
@@ -52,19 +52,28 @@ export class GapJudge {
   }
 
   private massOf(id: number): number {
-    return this.kernels instanceof DipoleKernels && this.kernels.settings.masses ? quarkMass(id) : 0;
+    return this.kernels instanceof DipoleKernels ? this.kernels.massOf(id) : 0;
   }
 
   private kernelsOf(head: SampleHead): DipoleKernels | NotAssessable {
-    // events of one file share the record of their settings
-    if (head.shower !== this.shower) {
-      this.shower = head.shower;
-      const { shower, columns, meaning, evolutionVariable, ordering, hardScale, tLow } = head;
-      const all = JSON.stringify([shower, columns, meaning, evolutionVariable, ordering, hardScale, tLow]);
-      if (all !== this.fingerprint) {
-        this.fingerprint = all;
-        this.kernels = makeKernels(head);
-      }
+    // events of one file share these objects
+    const { shower, columns, meaning, evolutionVariable, ordering, hardScale, tLow } = head;
+    const known = this.known;
+    const same =
+      known !== null &&
+      known.shower === shower &&
+      known.columns === columns &&
+      known.meaning === meaning &&
+      known.evolutionVariable === evolutionVariable &&
+      known.ordering === ordering &&
+      known.hardScale === hardScale &&
+      known.tLow === tLow;
+    if (same) return this.kernels;
+    this.known = head;
+    const all = JSON.stringify([shower, columns, meaning, evolutionVariable, ordering, hardScale, tLow]);
+    if (all !== this.fingerprint) {
+      this.fingerprint = all;
+      this.kernels = makeKernels(head);
     }
     return this.kernels;
   }

@@ -1,8 +1,11 @@
 import type { History } from '../history/index.ts';
 import { exp, log } from '../math/index.ts';
-import { CHANNEL_COUNT, dipoleExponents } from './dipole-exponents.ts';
+import { CHANNEL_COUNT, dipoleExponents, GLUON } from './dipole-exponents.ts';
 import { type DipoleKernels, LIGHT } from './dipole-kernels.ts';
 import { KEPT, type LiveDipoles } from './live-dipoles.ts';
+
+/** PDG number of bottom. */
+const HEAVIEST_QUARK = 5;
 
 // scratch, not reentrant
 const sums = new Float64Array(CHANNEL_COUNT);
@@ -12,7 +15,8 @@ const sums = new Float64Array(CHANNEL_COUNT);
  *
  * Element n belongs to the gap before step n, the last one to the gap after the last step, in which nothing happened
  * down to the lowest t. An exponent is the expected number of branchings in a gap. NaN where a gap cannot be judged: a
- * momentum or colour end is missing, t rises, a dipole is heavier than the event, or the event broke off before its end.
+ * momentum or colour end is missing, t rises, a parton or its mass is none of the kernels', a dipole is heavier than the
+ * event, or the event broke off before its end.
  */
 export interface GapProbabilities {
   readonly assessable: true;
@@ -66,24 +70,33 @@ export function judgeGaps(history: History, kernels: DipoleKernels, dipoles: Liv
   return out;
 }
 
-/** Whether the tables hold every dipole. @param first whether the first emission's matrix element corrects the rates. */
+/**
+ * Whether the kernels are those of every dipole: its ends are gluons or quarks up to bottom with the masses that the
+ * kernels give them, and the tables reach its Q^2.
+ *
+ * @param first whether the first emission's matrix element corrects the rates.
+ */
 export function demandDipoles(
   dipoles: LiveDipoles,
-  { entries }: History,
+  { entries, head }: History,
   kernels: DipoleKernels,
   first: boolean,
 ): boolean {
   if (dipoles.broken > 0) return false;
-  const highest = kernels.settings.energy * kernels.settings.energy;
+  const { energy } = kernels.settings;
+  const highest = energy * energy;
+  const recordsMass = head.columns.entries.includes('m');
   for (let n = 0; n < dipoles.count; n++) {
     const q2 = dipoles.q2[n];
     if (!(q2 > 0 && q2 <= highest * (1 + 1e-9))) return false;
-    // the first emission's matrix element is that of two massless partons with all the energy
-    if (!first) continue;
-    const light =
-      kernels.kindOf(entries.id[dipoles.colourRow[n]]) === LIGHT &&
-      kernels.kindOf(entries.id[dipoles.anticolourRow[n]]) === LIGHT;
-    if (!light || q2 < highest * (1 - 1e-9)) return false;
+    for (const row of [dipoles.colourRow[n], dipoles.anticolourRow[n]]) {
+      const id = entries.id[row];
+      if (id !== GLUON && !(id !== 0 && Math.abs(id) <= HEAVIEST_QUARK)) return false;
+      if (recordsMass && !(Math.abs(entries.m[row] - kernels.massOf(id)) <= 1e-9 * energy)) return false;
+      // the first emission's matrix element is that of two massless partons with all the energy
+      if (first && kernels.kindOf(id) !== LIGHT) return false;
+    }
+    if (first && q2 < highest * (1 - 1e-9)) return false;
   }
   return true;
 }

@@ -178,6 +178,21 @@ describe('the judge', () => {
     expect(conditionalsOf(cut).shareOwn[1]).toBeNaN();
   });
 
+  it('leaves out gaps of partons that its kernels are not made for', () => {
+    const id = history.entries.id.slice();
+    const m = history.entries.m.slice();
+    const entries = { ...history.entries, length: history.entries.length, id, m };
+    id[history.steps.i[0]] = 6;
+    expect(gapsOf({ ...history, entries }).delta[1]).toBeNaN();
+    id.set(history.entries.id);
+    m[history.steps.i[0]] = 0.3;
+    expect(gapsOf({ ...history, entries }).delta[0]).toBeGreaterThan(0);
+    expect(gapsOf({ ...history, entries }).delta[1]).toBeNaN();
+    expect(judge.gapsOf({ ...history, head: { ...history.head, tLow: 2 } })).toMatchObject({
+      assessable: false,
+    });
+  });
+
   it('knows no step whose dipole is not among those of the rows', () => {
     const partner = history.steps.partner.slice();
     partner[1] = partner[0];
